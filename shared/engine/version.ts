@@ -1,0 +1,2 @@
+/** Stored with every report; raised whenever a report could come out differently. */
+export const ENGINE_VERSION = '1.0.0';
