@@ -1,5 +1,5 @@
 import type { MachineState, Observer, Place } from '../interpreter/events';
-import type { FindingData, Severity } from '../report/report';
+import type { Extent, FindingData, Severity } from '../report/report';
 import type { Shop } from '../shop/shop';
 
 /** One hazard, one file. The file name is the id; the rule reference is generated from these fields. */
@@ -22,6 +22,19 @@ export interface Rule {
   /** Words a finding from its data alone, in the reader's unit. Sentences are whole and carry no line number. */
   readonly word: (data: FindingData, lengths: LengthWords) => Wording;
   readonly observe: (shop: Shop, report: Reporter) => Observer;
+  /** What only the comparison of the two readings of `/` blocks shows; called when there are any. */
+  readonly compare?:
+    ((run: WalkFacts, skipped: WalkFacts, report: FinalReporter) => void) | undefined;
+}
+/** What of a rule the docs and the client need: all but the code that looks. */
+export type RuleReference = Omit<Rule, 'observe' | 'compare' | 'word'>;
+/** One reading of a program with `/` blocks, for comparison with the other. */
+export interface WalkFacts {
+  readonly firstSkippable: Place;
+  readonly tools: readonly number[];
+  /** Lowest gauge-point and tip z per tool, and the extents, each null when nothing moved. */
+  readonly lowest: Readonly<Record<number, number>>;
+  readonly extent: Extent | null;
 }
 export type RuleGroup =
   | 'reading'
@@ -64,10 +77,16 @@ export interface FindingDraft {
   /** Where one rule has two severities, such as length-offset-disagrees. */
   readonly severity?: Severity | undefined;
   readonly unattended?: Severity | undefined;
+  /** The tool the finding is about, where it is not the one in the spindle. */
+  readonly tool?: number | undefined;
 }
 export interface Reporter {
   /** Counts the block towards the episode of its cause; blocks, not motions, are counted. */
   found(draft: FindingDraft, state: MachineState): void;
+}
+/** Reports after the walks are over, when there is no machine state any more. */
+export interface FinalReporter {
+  found(draft: FindingDraft): void;
 }
 
 export function defineRule(rule: Rule): Rule {
