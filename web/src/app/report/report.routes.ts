@@ -1,0 +1,5 @@
+import type { Routes } from '@angular/router';
+
+export const reportRoutes: Routes = [
+  { path: ':id', loadComponent: () => import('./report-page').then((m) => m.ReportPage) },
+];

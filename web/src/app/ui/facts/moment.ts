@@ -1,0 +1,27 @@
+/** A moment as a date-and-time field of the browser shows it: local time, to the minute. */
+export function showMoment(stored: string): string {
+  const moment = new Date(stored);
+  if (Number.isNaN(moment.getTime())) return '';
+  const two = (figure: number) => String(figure).padStart(2, '0');
+  const day = `${moment.getFullYear()}-${two(moment.getMonth() + 1)}-${two(moment.getDate())}`;
+  return `${day}T${two(moment.getHours())}:${two(moment.getMinutes())}`;
+}
+
+/** The moment as it is stored, or undefined when the field holds none. */
+export function readMoment(shown: string): string | undefined {
+  const moment = new Date(shown);
+  return Number.isNaN(moment.getTime()) ? undefined : moment.toISOString();
+}
+
+/** A moment as a person reads it: "30 Nov 2026, 18:04". */
+export function wordMoment(stored: string): string {
+  const moment = new Date(stored);
+  if (Number.isNaN(moment.getTime())) return stored;
+  return moment.toLocaleString('en-GB', {
+    day: 'numeric',
+    month: 'short',
+    year: 'numeric',
+    hour: '2-digit',
+    minute: '2-digit',
+  });
+}
