@@ -1,7 +1,18 @@
-import type { Observer, Place } from '../interpreter/events';
-import type { Rule } from '../rules/rule';
+import type { MachineState, Observer, Place } from '../interpreter/events';
+import type { FindingDraft, Rule } from '../rules/rule';
 import type { Shop } from '../shop/shop';
+import { ENGINE_VERSION } from '../version';
+import { blindSentences } from './blind';
+import { canonicalJson } from './canonical-json';
+import { countLinesNotModelled } from './coverage';
+import { beginEpisode, openEpisodes, type Episode } from './episodes';
+import { listFindings, unattendedSeverities } from './findings';
+import { lengthWords } from './length-words';
 import type { Report } from './report';
+import { countSeverities, verdictOf } from './severity';
+import { sha256Hex } from './sha256';
+import { gatherSummaries } from './summaries';
+import { gatherWalkFacts } from './walk-facts';
 
 /**
  * The report of one check while it is being gathered. The walk of the program is handed the observers
@@ -40,6 +51,87 @@ export interface ProgramRead {
   readonly firstSkippable?: Place | undefined;
 }
 
-export function openReport(_shop: Shop, _rules: readonly Rule[]): ReportInProgress {
-  throw new Error('The report is not put together yet.');
+export function openReport(shop: Shop, rules: readonly Rule[]): ReportInProgress {
+  const run = openWalk(shop, rules);
+  let skipped: Walk | undefined;
+  const coverage = countLinesNotModelled();
+  const summaries = gatherSummaries(shop);
+  return {
+    observers: [...run.before, coverage, ...summaries.observers, ...run.after],
+    openSecondWalk() {
+      skipped = openWalk(shop, rules);
+      return [...skipped.before, ...skipped.after];
+    },
+    finish(read) {
+      const findings = listFindings(
+        run.book.gathered(),
+        skipped?.book.gathered(),
+        skipped ? compareWalks(shop, rules, run, skipped, read) : [],
+        lengthWords('both'),
+      );
+      const counts = countSeverities(findings.map((finding) => finding.severity));
+      const unattended = countSeverities(unattendedSeverities(findings));
+      const summary = summaries.result();
+      return {
+        format: 'nightlatch-report',
+        version: 1,
+        engine: ENGINE_VERSION,
+        program: {
+          name: read.name,
+          sha256: read.sha256,
+          bytes: read.bytes,
+          lines: read.lines,
+        },
+        setup: { sha256: sha256Hex(canonicalJson(shop.setup)) },
+        verdict: verdictOf(counts),
+        counts,
+        unattended: { verdict: verdictOf(unattended), counts: unattended },
+        findings,
+        tools: summary.tools,
+        extents: summary.extents,
+        workZeroWindow: summary.workZeroWindow,
+        seconds: summary.seconds,
+        material: summary.material,
+        coverage: {
+          blocks: read.blocks,
+          modelled: Math.max(0, read.blocks - coverage.count()),
+        },
+        dependsOn: summary.dependsOn,
+        blind: blindSentences(shop.setup),
+      };
+    },
+  };
 }
+
+type Walk = ReturnType<typeof openWalk>;
+
+function openWalk(shop: Shop, rules: readonly Rule[]) {
+  const book = openEpisodes(shop.setup);
+  const facts = gatherWalkFacts();
+  const observers = rules.map((rule) => rule.observe(shop, book.reporterFor(rule)));
+  return { book, facts, before: [book.closing, ...observers, facts], after: [book.counting] };
+}
+
+function compareWalks(
+  shop: Shop,
+  rules: readonly Rule[],
+  run: Walk,
+  skipped: Walk,
+  read: ProgramRead,
+): readonly Episode[] {
+  const at = read.firstSkippable;
+  if (!at) return [];
+  const found: Episode[] = [];
+  for (const rule of rules) {
+    const take = (draft: FindingDraft) =>
+      found.push(beginEpisode(rule, draft, NO_STATE, shop.setup));
+    rule.compare?.(run.facts.facts(at), skipped.facts.facts(at), { found: take });
+  }
+  return found;
+}
+
+/** After the walks nothing is held and no offset is in force. */
+const NO_STATE: Pick<MachineState, 'held' | 'workOffset'> = {
+  held: { known: false, number: null, tool: undefined },
+  workOffset: '',
+};
