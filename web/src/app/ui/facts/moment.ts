@@ -12,16 +12,3 @@ export function readMoment(shown: string): string | undefined {
   const moment = new Date(shown);
   return Number.isNaN(moment.getTime()) ? undefined : moment.toISOString();
 }
-
-/** A moment as a person reads it: "30 Nov 2026, 18:04". */
-export function wordMoment(stored: string): string {
-  const moment = new Date(stored);
-  if (Number.isNaN(moment.getTime())) return stored;
-  return moment.toLocaleString('en-GB', {
-    day: 'numeric',
-    month: 'short',
-    year: 'numeric',
-    hour: '2-digit',
-    minute: '2-digit',
-  });
-}
