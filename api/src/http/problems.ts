@@ -30,6 +30,11 @@ export const PROBLEMS = {
     title: 'The session has ended',
     next: 'Sign in again.',
   },
+  'session-just-renewed': {
+    status: 409,
+    title: 'The session was renewed a moment ago',
+    next: 'Ask again: the new cookies are there already.',
+  },
   'no-longer-active': {
     status: 401,
     title: 'This person may no longer sign in',

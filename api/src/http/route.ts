@@ -12,6 +12,8 @@ export interface Actor {
   readonly units: Units;
   /** The family of refresh tokens this sign-in began. */
   readonly sessionId: string;
+  /** When the access token of this request ends. */
+  readonly accessEnds: Date;
 }
 
 export interface OpenCall<Query, Body> {

@@ -75,8 +75,7 @@ function schemasOf(names: Names, io: 'input' | 'output'): Record<string, Json> {
   });
   const components: Record<string, Json> = {};
   for (const [id, schema] of Object.entries(schemas)) {
-    const { $schema: _dialect, $id: _address, ...rest } = schema as Json;
-    components[id] = rest;
+    components[id] = withoutAddress(schema as Json);
   }
   return components;
 }
@@ -190,9 +189,12 @@ function referTo(schema: z.ZodType | undefined, names: Names, io: 'input' | 'out
   if (!schema) return {};
   const name = names.get(schema);
   if (name) return { $ref: `#/components/schemas/${componentName(name, io)}` };
-  const { $schema: _dialect, ...inline } = z.toJSONSchema(schema, {
-    io,
-    unrepresentable: 'any',
-  }) as Json;
-  return inline;
+  return withoutAddress(z.toJSONSchema(schema, { io, unrepresentable: 'any' }) as Json);
+}
+
+/** The document itself says which dialect it is in and where a schema stands. */
+function withoutAddress(schema: Json): Json {
+  return Object.fromEntries(
+    Object.entries(schema).filter(([key]) => key !== '$schema' && key !== '$id'),
+  );
 }

@@ -5,12 +5,20 @@ export const ACCESS_SECONDS = 10 * 60;
 export const ISSUER = 'nightlatch';
 export const ALGORITHM = 'HS256';
 
-const claimsSchema = z.object({ sub: z.uuid(), shop: z.uuid(), session: z.uuid() });
+const claimsSchema = z.object({
+  sub: z.uuid(),
+  shop: z.uuid(),
+  session: z.uuid(),
+  exp: z.number().int(),
+});
 
 export interface Claims {
   readonly personId: string;
   readonly shopId: string;
   readonly sessionId: string;
+}
+export interface ReadClaims extends Claims {
+  readonly expiresAt: Date;
 }
 
 /** A signed token that says who is asking for the next ten minutes, and when it ends. */
@@ -29,9 +37,9 @@ export function issueAccessToken(
 }
 
 /** What a verified token claims; undefined when it is signed by us but not of this form. */
-export function readClaims(payload: unknown): Claims | undefined {
+export function readClaims(payload: unknown): ReadClaims | undefined {
   const read = claimsSchema.safeParse(payload);
   if (!read.success) return undefined;
-  const { sub, shop, session } = read.data;
-  return { personId: sub, shopId: shop, sessionId: session };
+  const { sub, shop, session, exp } = read.data;
+  return { personId: sub, shopId: shop, sessionId: session, expiresAt: new Date(exp * 1000) };
 }

@@ -4,7 +4,7 @@ import { Strategy } from 'passport-jwt';
 import { cookieOf } from '../http/csrf';
 import { refuse, Refusal } from '../http/problems';
 import type { Actor } from '../http/route';
-import { ALGORITHM, ISSUER, readClaims, type Claims } from './access-tokens';
+import { ALGORITHM, ISSUER, readClaims, type ReadClaims } from './access-tokens';
 import { ACCESS_COOKIE } from './session-cookies';
 
 export interface Authentication {
@@ -18,7 +18,7 @@ export interface Authentication {
  */
 export function authenticate(
   secret: string,
-  findActor: (claims: Claims) => Promise<Actor | 'inactive' | 'ended'>,
+  findActor: (claims: ReadClaims) => Promise<Actor | 'inactive' | 'ended'>,
 ): Authentication {
   const actors = new WeakMap<Request, Actor>();
   const guard = new passport.Passport();

@@ -1,0 +1,21 @@
+import type { NewPerson, Person } from '#contracts';
+import type { Dependencies } from '../dependencies';
+import type { Actor } from '../http/route';
+
+export async function addPerson(
+  deps: Dependencies,
+  actor: Actor,
+  { name, email, password, roles }: NewPerson,
+): Promise<Person> {
+  const passwordHash = await deps.passwords.hash(password);
+  return await deps.database.transaction(async (stores) => {
+    const person = await stores.people.add(actor.shopId, { name, email, passwordHash, roles });
+    await stores.audit.add(actor.shopId, {
+      personId: actor.id,
+      action: 'person.add',
+      subject: person.name,
+      detail: { email: person.email, roles: person.roles },
+    });
+    return person;
+  });
+}
