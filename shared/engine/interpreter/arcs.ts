@@ -1,0 +1,259 @@
+import { LETTER } from '../blocks/block';
+import type { Motion } from './events';
+import { PLANES } from './machine';
+import type { Target } from './motions';
+import { tellProblem, type Run } from './run';
+
+const { I, J, K, R } = LETTER;
+const TURN = 2 * Math.PI;
+const QUARTER = Math.PI / 2;
+/** NISTIR 6556: |R| may fall short of half the chord by this part of it, for rounding alone. */
+const CHORD_SLACK = 1e-12;
+/** NISTIR 6556 3.5.3.2: the two radii may differ by 0.002 mm, or 0.0002 inch. */
+const STRICT_TOLERANCE_MM = 0.002;
+const STRICT_TOLERANCE_INCH = 0.0002 * 25.4;
+/** Radii are compared after an addition and a root, so their last digits mean nothing. */
+const RADIUS_ROUNDING = 1e-9;
+
+/** Centre letters of each plane in plane order, and the third that has no meaning there. */
+const CENTRES = [
+  { u: I, v: J, other: K },
+  { u: K, v: I, other: J },
+  { u: J, v: K, other: I },
+] as const;
+
+/** Centre in plane order and radius, machine mm. */
+export interface Circle {
+  u: number;
+  v: number;
+  radius: number;
+}
+
+/** Carries out G2 (`turning` −1) or G3 (+1). Says false where the arc cannot be run at all. */
+export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): boolean {
+  const { machine, motion } = run;
+  const index = machine.planeIndex;
+  const fromU = index === 0 ? machine.x : index === 1 ? machine.z : machine.y;
+  const fromV = index === 0 ? machine.y : index === 1 ? machine.x : machine.z;
+  const toU = index === 0 ? to.x : index === 1 ? to.z : to.y;
+  const toV = index === 0 ? to.y : index === 1 ? to.x : to.z;
+  const circle = findCircle(run, turning, fromU, fromV, toU, toV);
+  if (!circle) return false;
+  const startAngle = Math.atan2(fromV - circle.v, fromU - circle.u);
+  const endAngle = Math.atan2(toV - circle.v, toU - circle.u);
+  const turn = findTurn(turning, startAngle, endAngle, fromU === toU && fromV === toV);
+
+  motion.kind = 'arc';
+  motion.by = 'program';
+  motion.fromX = machine.x;
+  motion.fromY = machine.y;
+  motion.fromZ = machine.z;
+  motion.fromA = machine.a;
+  motion.toX = to.x;
+  motion.toY = to.y;
+  motion.toZ = to.z;
+  motion.toA = to.a;
+  motion.plane = PLANES[index]!;
+  motion.centreU = circle.u;
+  motion.centreV = circle.v;
+  motion.radius = circle.radius;
+  motion.turn = turn;
+  setExtremes(motion, index, startAngle, turn);
+  const depth = index === 0 ? to.z - machine.z : index === 1 ? to.y - machine.y : to.x - machine.x;
+  const along = circle.radius * turn;
+  motion.length = Math.sqrt(along * along + depth * depth);
+  motion.moves = motion.length !== 0;
+  motion.feed = feed;
+  machine.x = to.x;
+  machine.y = to.y;
+  machine.z = to.z;
+  machine.a = to.a;
+  run.tell.motion(motion);
+  return true;
+}
+
+function findTurn(turning: 1 | -1, start: number, end: number, isFull: boolean): number {
+  if (isFull) return turning * TURN;
+  let turn = end - start;
+  if (turning > 0) {
+    if (turn <= 0) turn += TURN;
+  } else if (turn >= 0) turn -= TURN;
+  return turn;
+}
+
+function findCircle(
+  run: Run,
+  turning: 1 | -1,
+  fromU: number,
+  fromV: number,
+  toU: number,
+  toV: number,
+): Circle | undefined {
+  const { block } = run;
+  const letters = CENTRES[run.machine.planeIndex]!;
+  const hasCentre = block.has(letters.u) || block.has(letters.v);
+  if (block.has(letters.other))
+    tellProblem(
+      run,
+      'arc-impossible',
+      { letters: 'IJK' },
+      {
+        reason: 'centre-letter',
+        what: String.fromCharCode(65 + letters.other),
+        plane: run.machine.plane,
+      },
+    );
+  if (block.has(R) && hasCentre) {
+    tellProblem(run, 'arc-impossible', { letters: 'IJKR' }, { reason: 'radius-and-centre' });
+    return undefined;
+  }
+  if (block.has(R)) return circleByRadius(run, turning, fromU, fromV, toU, toV);
+  if (!hasCentre) {
+    tellProblem(run, 'arc-centre-missing', undefined, { plane: run.machine.plane });
+    return undefined;
+  }
+  return circleByCentre(run, fromU, fromV, toU, toV);
+}
+
+function circleByCentre(
+  run: Run,
+  fromU: number,
+  fromV: number,
+  toU: number,
+  toV: number,
+): Circle | undefined {
+  const { block, machine, circle } = run;
+  const letters = CENTRES[machine.planeIndex]!;
+  const { unit } = machine;
+  const wordU = block.has(letters.u) ? block.value(letters.u) * unit : 0;
+  const wordV = block.has(letters.v) ? block.value(letters.v) * unit : 0;
+  if (machine.isArcCentreAbsolute) {
+    const index = machine.planeIndex;
+    const zeroU = index === 0 ? machine.baseX : index === 1 ? machine.baseZ : machine.baseY;
+    const zeroV = index === 0 ? machine.baseY : index === 1 ? machine.baseX : machine.baseZ;
+    circle.u = block.has(letters.u) ? zeroU + wordU : fromU;
+    circle.v = block.has(letters.v) ? zeroV + wordV : fromV;
+  } else {
+    circle.u = fromU + wordU;
+    circle.v = fromV + wordV;
+  }
+  const start = Math.hypot(fromU - circle.u, fromV - circle.v);
+  const end = Math.hypot(toU - circle.u, toV - circle.v);
+  circle.radius = start;
+  if (start === 0) {
+    tellProblem(run, 'arc-impossible', { letters: 'IJK' }, { reason: 'no-radius' });
+    return undefined;
+  }
+  const difference = Math.abs(start - end);
+  const tolerance = arcTolerance(run);
+  if (!(difference <= tolerance + RADIUS_ROUNDING))
+    tellProblem(
+      run,
+      'arc-radius-mismatch',
+      { letters: 'XYZIJK' },
+      {
+        start,
+        end,
+        by: difference,
+        tolerance,
+      },
+    );
+  return circle;
+}
+
+function arcTolerance(run: Run): number {
+  if (!run.controller.switches.strict) return run.controller.arcTolerance;
+  return run.machine.unit === 1 ? STRICT_TOLERANCE_MM : STRICT_TOLERANCE_INCH;
+}
+
+function circleByRadius(
+  run: Run,
+  turning: 1 | -1,
+  fromU: number,
+  fromV: number,
+  toU: number,
+  toV: number,
+): Circle | undefined {
+  const { circle } = run;
+  const radius = run.block.value(R) * run.machine.unit;
+  const du = toU - fromU;
+  const dv = toV - fromV;
+  const chord = Math.hypot(du, dv);
+  if (chord === 0 || radius === 0) {
+    tellProblem(
+      run,
+      'arc-impossible',
+      { letters: 'R' },
+      {
+        reason: chord === 0 ? 'ends-where-it-starts' : 'no-radius',
+      },
+    );
+    return undefined;
+  }
+  const half = chord / 2;
+  const size = Math.abs(radius);
+  if (size < half * (1 - CHORD_SLACK)) {
+    tellProblem(
+      run,
+      'arc-impossible',
+      { letters: 'R' },
+      {
+        reason: 'radius-short',
+        radius: size,
+        halfChord: half,
+        short: half - size,
+      },
+    );
+    return undefined;
+  }
+  const toCentre = Math.sqrt(Math.max(0, size * size - half * half));
+  // Left of the chord for a short counterclockwise arc; a clockwise or a long one swaps sides.
+  const side = turning * Math.sign(radius);
+  circle.u = fromU + du / 2 - (side * toCentre * dv) / chord;
+  circle.v = fromV + dv / 2 + (side * toCentre * du) / chord;
+  circle.radius = size;
+  return circle;
+}
+
+/** True extremes: both ends and every quadrant point that the arc passes. */
+function setExtremes(motion: Motion, index: number, start: number, turn: number): void {
+  const { centreU, centreV, radius } = motion;
+  motion.minX = Math.min(motion.fromX, motion.toX);
+  motion.maxX = Math.max(motion.fromX, motion.toX);
+  motion.minY = Math.min(motion.fromY, motion.toY);
+  motion.maxY = Math.max(motion.fromY, motion.toY);
+  motion.minZ = Math.min(motion.fromZ, motion.toZ);
+  motion.maxZ = Math.max(motion.fromZ, motion.toZ);
+  const low = turn > 0 ? start : start + turn;
+  const high = turn > 0 ? start + turn : start;
+  for (let quarter = Math.ceil(low / QUARTER); quarter * QUARTER <= high; quarter++) {
+    const part = quarter & 3;
+    if (part === 0) widenU(motion, index, centreU + radius);
+    else if (part === 1) widenV(motion, index, centreV + radius);
+    else if (part === 2) widenU(motion, index, centreU - radius);
+    else widenV(motion, index, centreV - radius);
+  }
+}
+
+function widenU(motion: Motion, index: number, value: number): void {
+  if (index === 0) widenX(motion, value);
+  else if (index === 1) widenZ(motion, value);
+  else widenY(motion, value);
+}
+function widenV(motion: Motion, index: number, value: number): void {
+  if (index === 0) widenY(motion, value);
+  else if (index === 1) widenX(motion, value);
+  else widenZ(motion, value);
+}
+function widenX(motion: Motion, x: number): void {
+  if (x < motion.minX) motion.minX = x;
+  if (x > motion.maxX) motion.maxX = x;
+}
+function widenY(motion: Motion, y: number): void {
+  if (y < motion.minY) motion.minY = y;
+  if (y > motion.maxY) motion.maxY = y;
+}
+function widenZ(motion: Motion, z: number): void {
+  if (z < motion.minZ) motion.minZ = z;
+  if (z > motion.maxZ) motion.maxZ = z;
+}

@@ -1,0 +1,92 @@
+import type { Problem } from '../interpreter/events';
+
+/** Words a line may hold before it is no block at all; 26 letters and a handful of G and M words are usual. */
+export const MOST_WORDS = 200;
+/** Faults noted on one line; further ones say nothing new. */
+const MOST_FAULTS = 8;
+
+/** A fault of reading: which rule it is, the bytes that show it, and the figures for its sentence. */
+export interface Fault {
+  readonly problem: Problem;
+  readonly from: number;
+  readonly to: number;
+  readonly facts: Readonly<Record<string, string | number | boolean | null>>;
+  /** Whether the block can no longer be trusted, so that nothing of it is carried out. */
+  readonly voids: boolean;
+}
+
+/** A comment without its marks. */
+export interface CommentText {
+  readonly from: number;
+  readonly to: number;
+}
+
+/**
+ * One line as the lexer leaves it, reused from line to line: parallel arrays, so that a block of
+ * plain motion allocates nothing. Positions are indexes into `bytes`; letters are 0 for A … 25 for Z.
+ */
+export class LineWords {
+  bytes: Uint8Array = new Uint8Array(0);
+  start = 0;
+  /** One past the last byte of the line, its end mark not counted. */
+  end = 0;
+  count = 0;
+  readonly letters = new Uint8Array(MOST_WORDS);
+  readonly values = new Float64Array(MOST_WORDS);
+  readonly starts = new Int32Array(MOST_WORDS);
+  readonly ends = new Int32Array(MOST_WORDS);
+  /** Whether the number was written with a decimal point: 1 or 0. */
+  readonly points = new Uint8Array(MOST_WORDS);
+  /** Whether the line begins with the block-delete mark. */
+  skippable = false;
+  skipAt = 0;
+  /** Where a percent sign stands, or -1. */
+  percentAt = -1;
+  /** Whether the line ends with a line end; only the last line of a text may not. */
+  ended = true;
+  /** An O word's label as written, such as '1000' or '<name>'; '' for none. */
+  label = '';
+  labelFrom = 0;
+  labelTo = 0;
+  readonly comments: CommentText[] = [];
+  readonly faults: Fault[] = [];
+  /** Whether some fault voids the block. */
+  isVoid = false;
+  /** Bits of all bytes of comments and odd characters; nothing else can lie outside ASCII. */
+  bits = 0;
+
+  clear(bytes: Uint8Array, start: number): void {
+    this.bytes = bytes;
+    this.start = start;
+    this.count = 0;
+    this.skippable = false;
+    this.percentAt = -1;
+    if (this.label !== '') this.label = '';
+    if (this.comments.length > 0) this.comments.length = 0;
+    if (this.faults.length > 0) this.faults.length = 0;
+    this.isVoid = false;
+    this.bits = 0;
+  }
+
+  /** Whether the line holds anything but plain ASCII, so that bytes and columns differ. */
+  get hasWide(): boolean {
+    return (this.bits & 0x80) !== 0;
+  }
+
+  fault(fault: Fault): void {
+    if (fault.voids) this.isVoid = true;
+    if (this.faults.length >= MOST_FAULTS) return;
+    if (this.faults.some((noted) => noted.problem === fault.problem)) return;
+    this.faults.push(fault);
+  }
+
+  /** The bytes as text; anything but plain ASCII shows as a question mark. */
+  text(from: number, to: number): string {
+    let text = '';
+    for (let at = from; at < to; at++) {
+      const byte = this.bytes[at]!;
+      text += 0x20 <= byte && byte < 0x7f ? String.fromCharCode(byte) : '?';
+    }
+    return text;
+  }
+}
