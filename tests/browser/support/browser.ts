@@ -43,7 +43,10 @@ export async function visit(browser: Browser, address: string, looks: Looks = {}
   page.on('pageerror', (error) => complaints.push(error.message));
   page.on('console', (message) => {
     // A refused request (401 before sign-in, 409 on a clash) is logged by the browser itself.
-    if (message.type() === 'error' && !/the server responded with a status of 4/.test(message.text())) {
+    if (
+      message.type() === 'error' &&
+      !/the server responded with a status of 4/.test(message.text())
+    ) {
       complaints.push(message.text());
     }
   });

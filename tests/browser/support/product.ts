@@ -21,7 +21,8 @@ export interface Product {
  */
 export async function startProduct({ demo }: { readonly demo: boolean }): Promise<Product> {
   const server = process.env['DATABASE_URL'];
-  if (!server) throw new Error('DATABASE_URL is missing: run with node api/launch/pg.mjs test -- …');
+  if (!server)
+    throw new Error('DATABASE_URL is missing: run with node api/launch/pg.mjs test -- …');
   const name = `browser_${randomBytes(6).toString('hex')}`;
   await onServer(server, `create database ${name}`);
   const databaseUrl = Object.assign(new URL(server), { pathname: `/${name}` }).href;
