@@ -165,12 +165,12 @@ export function changedTools(changes: Readonly<Record<number, object>>): object[
 /** A new value: `change` merged over `base`, neither of them touched. */
 export function mergeOver(base: unknown, change: unknown): unknown {
   if (!isPlainObject(base) || !isPlainObject(change)) return change;
-  const merged: Record<string, unknown> = { ...base };
+  const merged = new Map<string, unknown>(Object.entries(base));
   for (const [key, value] of Object.entries(change)) {
-    if (value === undefined) delete merged[key];
-    else merged[key] = mergeOver(merged[key], value);
+    if (value === undefined) merged.delete(key);
+    else merged.set(key, mergeOver(merged.get(key), value));
   }
-  return merged;
+  return Object.fromEntries(merged);
 }
 
 function isPlainObject(value: unknown): value is Record<string, unknown> {
