@@ -1,4 +1,7 @@
-/** What api, worker and web agree on. Schemas and the types inferred from them; no behaviour. */
+/**
+ * What api, worker and web agree on. Schemas, the types inferred from them, and the
+ * two things all sides must say alike: who may do what, and which fields of a document are wrong.
+ */
 export * from './machines';
 export * from './people';
 export * from './problem';
@@ -6,3 +9,4 @@ export * from './programs';
 export * from './report';
 export * from './roles';
 export * from './setup';
+export * from './wrong-fields';

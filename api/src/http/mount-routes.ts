@@ -1,9 +1,8 @@
 import express, { Router, type Request, type RequestHandler, type Response } from 'express';
 import type { z } from 'zod';
-import { may, PERMISSIONS, type Permission, type Role } from '#contracts';
+import { may, PERMISSIONS, wrongFields, type Permission, type Role } from '#contracts';
 import { notFound, refuse } from './problems';
 import type { Actor, Route } from './route';
-import { wrongFields } from './wrong-fields';
 
 /** Bytes of a JSON body: forms are small, setups and macros hold whole texts. */
 const BODY_LIMITS = { small: 256 * 1024, document: 16 * 1024 * 1024 } as const;

@@ -1,5 +1,7 @@
 import type { z } from 'zod';
-import type { WrongField } from './problems';
+import type { Problem } from './problem';
+
+export type WrongField = NonNullable<Problem['fields']>[number];
 
 type Issue = z.core.$ZodIssue;
 type Path = readonly PropertyKey[];
