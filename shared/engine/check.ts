@@ -15,6 +15,8 @@ export interface CheckOptions {
   readonly rules?: readonly Rule[] | undefined;
   /** False where the host works out the digest of the bytes itself and gives it to `report`. */
   readonly digests?: boolean | undefined;
+  /** 'on': the controller's block-delete switch is on, so blocks with a `/` are skipped and never read as run. */
+  readonly blockDelete?: 'on' | undefined;
 }
 
 /** One check of one program. Memory does not grow with the program. */
@@ -40,7 +42,8 @@ export function startCheck(setup: Setup, options: CheckOptions = {}): Check {
   const gathering = openReport(shop, options.rules ?? RULES);
   const digest = options.digests === false ? undefined : openSha256();
   const observers = [...gathering.observers, ...(options.observers ?? [])];
-  const first = new Walk(shop, observers, { skips: false });
+  const skips = options.blockDelete === 'on';
+  const first = new Walk(shop, observers, { skips });
   let current = first;
   let bytes = 0;
   let bytesRead = 0;
@@ -58,7 +61,7 @@ export function startCheck(setup: Setup, options: CheckOptions = {}): Check {
     },
     endOfText() {
       current.endOfText();
-      if (current === first && first.firstSkippable) {
+      if (current === first && first.firstSkippable && !skips) {
         current = new Walk(shop, gathering.openSecondWalk(), { skips: true });
         bytesRead = 0;
         return 'read-again';
