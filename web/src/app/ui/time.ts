@@ -21,12 +21,40 @@ export function formatMoment(iso: string | null | undefined, now: Date): string 
   return `${day}${year}, ${clock}`;
 }
 
+/** `Tuesday 1 December`. */
+export function longDay(at: Date): string {
+  return `${DAYS[at.getDay()]} ${at.getDate()} ${LONG_MONTHS[at.getMonth()]}`;
+}
+
 /** Seconds between two moments, or null while either is missing. */
 export function secondsBetween(from: string | null, to: string | null): number | null {
   if (!from || !to) return null;
   return (new Date(to).getTime() - new Date(from).getTime()) / 1000;
 }
 
+const DAYS = [
+  'Sunday',
+  'Monday',
+  'Tuesday',
+  'Wednesday',
+  'Thursday',
+  'Friday',
+  'Saturday',
+] as const;
+const LONG_MONTHS = [
+  'January',
+  'February',
+  'March',
+  'April',
+  'May',
+  'June',
+  'July',
+  'August',
+  'September',
+  'October',
+  'November',
+  'December',
+] as const;
 const MONTHS = [
   'Jan',
   'Feb',
