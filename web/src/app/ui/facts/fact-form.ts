@@ -189,6 +189,7 @@ function readBox(node: BoxNode, path: FactPath, units: Units, wrong: WrongFact[]
 }
 
 function readMap(node: MapNode, path: FactPath, units: Units, wrong: WrongFact[]): unknown {
+  if (node.field.optional && node.entries().length === 0) return node.field.absent;
   const value: Record<string, unknown> = {};
   for (const entry of node.entries()) {
     const key = entry.key.control.value.trim();

@@ -18,7 +18,6 @@ import type {
   TextField,
 } from './fact-field';
 import { figure } from './fact-field';
-import type { Quantity } from './measure';
 import { showFigure } from './measure';
 import { showMoment } from './moment';
 
@@ -101,6 +100,7 @@ export interface MapEntry {
   readonly key: TextNode;
   readonly value: FactNode;
   readonly control: FormGroup;
+  readonly matcher: { isErrorState: () => boolean };
 }
 export interface MapNode extends Common {
   readonly kind: 'map';
@@ -189,7 +189,8 @@ export function makeMapEntry(
   };
   const valueNode = makeNode(field.value, value, making);
   const control = new FormGroup({ key: keyNode.control, value: valueNode.control });
-  return { id: making.nextId(), key: keyNode, value: valueNode, control };
+  const matcher = { isErrorState: () => keyNode.wrong() !== null };
+  return { id: making.nextId(), key: keyNode, value: valueNode, control, matcher };
 }
 
 function makeFigure(field: FigureField, value: unknown, making: FormMaking): FigureNode {

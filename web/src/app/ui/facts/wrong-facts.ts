@@ -108,7 +108,9 @@ function find(root: GroupNode, path: FactPath): { node: FactNode | undefined; pl
   let index = 0;
   while (index < path.length) {
     const rest = path.slice(index);
-    const next = childrenOf(node).find(({ steps }) => steps.every((each, at) => each === rest[at]));
+    const next: Child | undefined = childrenOf(node).find(({ steps }) =>
+      steps.every((each, at) => each === rest[at]),
+    );
     if (!next) break;
     node = next.node;
     words.push(next.words);
@@ -119,7 +121,12 @@ function find(root: GroupNode, path: FactPath): { node: FactNode | undefined; pl
     : { node, place: words.filter((each) => each !== '').join(', ') };
 }
 
-function childrenOf(node: FactNode): { steps: FactPath; words: string; node: FactNode }[] {
+interface Child {
+  readonly steps: FactPath;
+  readonly words: string;
+  readonly node: FactNode;
+}
+function childrenOf(node: FactNode): readonly Child[] {
   switch (node.kind) {
     case 'group':
       return node.children.map((each) => ({

@@ -1,0 +1,33 @@
+import type { FactSection } from '../ui/facts/fact-field';
+import { figure, length, maybe } from '../ui/facts/fact-field';
+
+/** The work-offset table of one machine, wrapped under `work` so that it has a field of its own. */
+export const OFFSET_SECTIONS: readonly FactSection[] = [
+  {
+    title: 'Work offsets',
+    help: 'Where each work zero stands, in machine coordinates, as the controller shows it. Leave an axis empty that is set anew for each job.',
+    fields: [
+      {
+        type: 'map',
+        key: 'work',
+        label: 'Offsets',
+        entry: 'offset',
+        keyLabel: 'Offset',
+        keyExample: 'G54',
+        value: {
+          type: 'group',
+          key: 'value',
+          label: '',
+          inline: true,
+          fields: [
+            maybe(length('x', 'X')),
+            maybe(length('y', 'Y')),
+            maybe(length('z', 'Z')),
+            maybe(figure('a', 'A', 'degrees')),
+          ],
+        },
+        start: {},
+      },
+    ],
+  },
+];

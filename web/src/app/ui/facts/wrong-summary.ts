@@ -1,0 +1,37 @@
+import {
+  DOCUMENT,
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+} from '@angular/core';
+import { Notice } from '../notice/notice';
+import { counted } from '../count';
+import type { MarkedFact } from './wrong-facts';
+
+/** Everything that keeps a form from being saved, each with a way to its field. */
+@Component({
+  selector: 'nl-wrong-summary',
+  imports: [Notice],
+  templateUrl: './wrong-summary.html',
+  styleUrl: './wrong-summary.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class WrongSummary {
+  readonly #document = inject(DOCUMENT);
+
+  readonly facts = input.required<readonly MarkedFact[]>();
+
+  protected readonly heading = computed(
+    () =>
+      `${counted(this.facts().length, 'entry', 'entries')} to put right; nothing was saved, nothing lost.`,
+  );
+
+  protected goTo(fact: MarkedFact): void {
+    if (fact.fieldId === undefined) return;
+    const field = this.#document.getElementById(fact.fieldId);
+    field?.scrollIntoView({ block: 'center' });
+    field?.focus();
+  }
+}
