@@ -13,6 +13,8 @@ export interface Config {
   readonly tokenSecret: string | undefined;
   /** Whether an empty database is filled with the demo shop at the start. */
   readonly demo: boolean;
+  /** Holds the texts of the demo's programs. */
+  readonly storiesFolder: string;
   /** Whether cookies are sent over TLS only; for a server that stands behind a TLS proxy. */
   readonly secureCookies: boolean;
   readonly logLevel: LogLevel;
@@ -64,6 +66,7 @@ export function readConfig(environment: NodeJS.ProcessEnv = process.env): Config
     webFolder: resolve(settings.NIGHTLATCH_WEB),
     tokenSecret: settings.NIGHTLATCH_TOKEN_SECRET,
     demo: settings.NIGHTLATCH_DEMO,
+    storiesFolder: resolve('fixtures/programs'),
     secureCookies: settings.NIGHTLATCH_SECURE_COOKIES,
     logLevel: settings.NIGHTLATCH_LOG,
   });

@@ -3,6 +3,7 @@ import type { ProgressFeed } from './checks/progress-feed';
 import type { Config } from './config';
 import type { Database } from './db/database';
 import type { Logger } from './http/request-log';
+import type { Turnstile } from './programs/turnstile';
 import type { Passwords } from './sessions/passwords';
 import type { SignInAttempts } from './sessions/sign-in-attempts';
 
@@ -14,6 +15,8 @@ export interface Dependencies {
   readonly feed: ProgressFeed;
   readonly passwords: Passwords;
   readonly attempts: SignInAttempts;
+  /** How many files are being stored at once: each holds a database connection while it comes in. */
+  readonly uploads: Turnstile;
   readonly tokenSecret: string;
   /** Sign-ins the welcome page shows; empty unless the demo was seeded. */
   readonly demoSignIns: Welcome['demo'];

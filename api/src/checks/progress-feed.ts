@@ -13,6 +13,8 @@ export interface Listener {
   progress(progress: CheckProgress): void;
   /** Notices may have been missed: read the state again. */
   missed(): void;
+  /** The server is stopping: no further notice will come. */
+  ending(): void;
 }
 
 export interface ProgressFeed {
@@ -81,6 +83,7 @@ export function openProgressFeed(databaseUrl: string, logger: Logger): ProgressF
     stop: async () => {
       stopped = true;
       clearTimeout(retry);
+      for (const ofShop of listeners.values()) for (const each of [...ofShop]) each.ending();
       await client?.end();
     },
   };

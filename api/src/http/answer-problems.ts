@@ -1,6 +1,8 @@
 import type { ErrorRequestHandler, Request, RequestHandler, Response } from 'express';
+import { StoreRefusal } from '../db/store-refusal';
 import { problemDocument, Refusal, refuse } from './problems';
 import { requestIdOf, type Logger } from './request-log';
+import { refusalOfStore } from './store-refusals';
 
 /** The last stop of every request that went wrong: an RFC 9457 document, never a stack. */
 export function answerProblems(logger: Logger): ErrorRequestHandler {
@@ -40,6 +42,7 @@ function sendProblem(refusal: Refusal, request: Request, response: Response): vo
 
 function asRefusal(error: unknown): Refusal {
   if (error instanceof Refusal) return error;
+  if (error instanceof StoreRefusal) return refusalOfStore(error);
   return bodyRefusal(error) ?? refuse('our-fault', 'The request could not be carried out.');
 }
 

@@ -65,6 +65,11 @@ export const PROBLEMS = {
     title: 'It is there already',
     next: 'Use another value, or change the one that is there.',
   },
+  'tools-differ': {
+    status: 409,
+    title: 'Tools of the file differ from tools of the shop',
+    next: 'Send it again with replaceTools to take the tools of the file, or correct the file.',
+  },
   'not-possible-now': {
     status: 409,
     title: 'Not possible as things stand',

@@ -16,6 +16,9 @@ export interface Actor {
   readonly accessEnds: Date;
 }
 
+/** As much of the actor as a use case needs: whose name the change bears and what they may do. */
+export type Author = Pick<Actor, 'id' | 'shopId' | 'roles'>;
+
 export interface OpenCall<Query, Body> {
   /** The `:id` of the path; empty where the path has none. Always a UUID otherwise. */
   readonly id: string;

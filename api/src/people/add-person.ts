@@ -1,10 +1,10 @@
 import type { NewPerson, Person } from '#contracts';
 import type { Dependencies } from '../dependencies';
-import type { Actor } from '../http/route';
+import type { Author } from '../http/route';
 
 export async function addPerson(
-  deps: Dependencies,
-  actor: Actor,
+  deps: Pick<Dependencies, 'database' | 'passwords'>,
+  actor: Author,
   { name, email, password, roles }: NewPerson,
 ): Promise<Person> {
   const passwordHash = await deps.passwords.hash(password);

@@ -2,7 +2,7 @@ import type { Person, PersonChange } from '#contracts';
 import type { Stores } from '../db/database';
 import type { Dependencies } from '../dependencies';
 import { notFound, refuse } from '../http/problems';
-import type { Actor } from '../http/route';
+import type { Author } from '../http/route';
 
 /**
  * An admin's change of a person. Taking someone's access away, or giving a new password, ends all their
@@ -10,7 +10,7 @@ import type { Actor } from '../http/route';
  */
 export async function changePerson(
   deps: Dependencies,
-  actor: Actor,
+  actor: Author,
   id: string,
   { name, roles, active, password }: PersonChange,
 ): Promise<Person> {

@@ -1,13 +1,13 @@
 import type { ValidSetup } from '#contracts';
 import type { Dependencies } from '../dependencies';
-import type { Actor } from '../http/route';
+import type { Author } from '../http/route';
 
 type Policy = ValidSetup['policy'];
 
 /** A new revision of the policy; checks made before keep the one they were held against. */
 export async function changePolicy(
   deps: Dependencies,
-  actor: Actor,
+  actor: Author,
   policy: Policy,
 ): Promise<Policy> {
   return await deps.database.transaction(async (stores) => {

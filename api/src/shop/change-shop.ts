@@ -1,10 +1,10 @@
 import type { ShopChange, ShopDetails } from '#contracts';
 import type { Dependencies } from '../dependencies';
-import type { Actor } from '../http/route';
+import type { Author } from '../http/route';
 
 export async function changeShop(
   deps: Dependencies,
-  actor: Actor,
+  actor: Author,
   change: ShopChange,
 ): Promise<ShopDetails> {
   return await deps.database.transaction(async (stores) => {
