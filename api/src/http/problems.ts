@@ -1,4 +1,4 @@
-import type { Problem as ProblemDocument } from '#contracts';
+import type { Problem as ProblemDocument, WrongField } from '#contracts';
 
 /**
  * Everything the API may refuse, in one catalogue: the status, a heading and what the person can do.
@@ -113,7 +113,6 @@ export const PROBLEMS = {
 } as const satisfies Record<string, { status: number; title: string; next: string }>;
 
 export type ProblemCode = keyof typeof PROBLEMS;
-export type WrongField = NonNullable<ProblemDocument['fields']>[number];
 
 /** An expected refusal on its way to the reply. Anything else that is thrown is a bug. */
 export class Refusal extends Error {

@@ -1,5 +1,6 @@
-import { StoreRefusal } from '../db/store-refusal';
-import { refuse, type Refusal, type WrongField } from './problems';
+import type { WrongField } from '#contracts';
+import type { StoreRefusal } from '../db/store-refusal';
+import { refuse, type Refusal } from './problems';
 
 /** A store's refusal as a reply says it. */
 export function refusalOfStore({ code, message, facts }: StoreRefusal): Refusal {

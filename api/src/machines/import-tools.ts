@@ -63,21 +63,22 @@ export async function importTools(
 
 /** A file keeps length and diameter entries in tables; the shop keeps those of a tool with the tool. */
 function splitTables({ tools, offsets, controller }: ValidSetup) {
-  const length = { ...offsets.length };
-  const diameter = { ...offsets.diameter };
-  const fileTools = tools.map((tool): FileTool => {
-    const lengthKey = String(tool.number);
-    const diameterKey = String(tool.number + controller.diameterOffsetShift);
-    const taken = {
-      tool,
-      lengthOffset: length[lengthKey] ?? null,
-      diameterOffset: diameter[diameterKey] ?? null,
-    };
-    delete length[lengthKey];
-    delete diameter[diameterKey];
-    return taken;
-  });
-  return { tools: fileTools, otherOffsets: { length, diameter } };
+  const lengthKey = ({ number }: Tool) => String(number);
+  const diameterKey = ({ number }: Tool) => String(number + controller.diameterOffsetShift);
+  const fileTools = tools.map((tool): FileTool => ({
+    tool,
+    lengthOffset: offsets.length[lengthKey(tool)] ?? null,
+    diameterOffset: offsets.diameter[diameterKey(tool)] ?? null,
+  }));
+  const otherOffsets = {
+    length: without(offsets.length, tools.map(lengthKey)),
+    diameter: without(offsets.diameter, tools.map(diameterKey)),
+  };
+  return { tools: fileTools, otherOffsets };
+}
+
+function without(table: Record<string, number>, keys: readonly string[]): Record<string, number> {
+  return Object.fromEntries(Object.entries(table).filter(([key]) => !keys.includes(key)));
 }
 
 function differs({ tool, lengthOffset, diameterOffset }: ToolRecord, file: FileTool): boolean {
