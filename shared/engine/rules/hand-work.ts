@@ -1,0 +1,43 @@
+import { text } from './finding-data';
+import { defineRule } from './rule';
+import type { CommentEvent, Place } from '../interpreter/events';
+
+/** A message beside a stop that asks a person to do something. Common practice, no source. */
+export const handWork = defineRule({
+  id: 'hand-work',
+  group: 'unattended',
+  title: 'The program asks a person to do something',
+  severity: 'note',
+  unattended: 'hold',
+  hold: 'judge',
+  protects: 'The work from going on without what the programmer counted on a person to do.',
+  explanation:
+    'A comment or message on the block of a stop (M0, M1, M60), or alone on one of the two lines before it, is read as an instruction: turn the part, move a clamp, brush the chips. Comments elsewhere are not judged, and the words themselves are not understood.',
+  examples: {
+    bad: 'G21 G90 G54\nM0 (TURN THE PART OVER)\nM30',
+    good: 'G21 G90 G54\n(TURN THE PART OVER AFTER THIS RUN)\nG4 P1\nM30',
+  },
+  word: (data) => ({
+    message: `At this stop the program says: “${text(data, 'says')}”.`,
+    advice: 'Have a person there to do it, or split the program at this place.',
+  }),
+  observe: (_shop, report) => {
+    let said = '';
+    let saidAt: Place | undefined;
+    return {
+      comment({ text: words, place }: CommentEvent) {
+        if (!/\p{L}{2}/u.test(words)) return;
+        said = words.trim();
+        saidAt = place;
+      },
+      stop({ place }, state) {
+        if (!saidAt || place.line - saidAt.line > LINES_BEFORE) return;
+        report.found({ cause: said, at: saidAt, data: { says: said } }, state);
+        saidAt = undefined;
+      },
+    };
+  },
+});
+
+/** A post prints the message at most this many lines above its stop. */
+const LINES_BEFORE = 2;
