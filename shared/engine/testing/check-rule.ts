@@ -66,7 +66,7 @@ function readMarks(marked: string): { program: string; marks: readonly Mark[] } 
     const [, before = '', carets = '', rule = '', severity, message] = mark;
     const from = before.length + 1;
     const columns = carets === '|' ? undefined : ([from, from + carets.length] as const);
-    marks.push({ line: lines.length, columns, rule, severity, message });
+    marks.push({ line: Math.max(1, lines.length), columns, rule, severity, message });
   }
   return { program: lines.join('\n'), marks };
 }

@@ -1,0 +1,21 @@
+import { reportProblem } from './report-problem';
+import { defineRule } from './rule';
+
+/** No end code: nothing says that the file is whole, and nothing is reset. */
+export const missingEnd = defineRule({
+  id: 'missing-end',
+  group: 'reading',
+  title: 'The program has no end code',
+  severity: 'hold',
+  hold: 'judge',
+  protects: 'The run from a file that was cut short, and the next one from what this leaves on.',
+  explanation:
+    'Reported only when M2, M30 and M99 are all absent. The end code stops spindle and coolant and resets modes; without it they stay as they are. A missing end is also the commonest sign of a file that was not transferred whole.',
+  examples: { bad: 'G21 G90 G54\nG0 X10\nM5', good: 'G21 G90 G54\nG0 X10\nM5\nM30' },
+  word: () => ({
+    message: 'The program ends without M2, M30 or M99.',
+    advice:
+      'Compare the file with its source; if it is whole, write the end code that this controller uses.',
+  }),
+  observe: (_shop, report) => reportProblem(report, 'missing-end', () => ''),
+});

@@ -1,0 +1,67 @@
+import { test } from 'vitest';
+import { checkRule } from '../testing/check-rule';
+import { notModelled } from './not-modelled';
+
+test('flags a code nobody told it about', () => {
+  checkRule(
+    notModelled,
+    {},
+    `
+M250
+^^^^ not-modelled: M250 is not modelled by this check.
+M30
+`,
+  );
+});
+
+test('flags a value from an expression and a parameter', () => {
+  checkRule(
+    notModelled,
+    {},
+    `
+G0 X[1+2]
+   ^^^^^^ not-modelled: X[1+2] takes its value from an expression, which this check does not work out.
+#1=5
+^^^^ not-modelled: #1=5 sets a parameter, which this check does not follow.
+M30
+`,
+  );
+});
+
+test('flags flow words', () => {
+  checkRule(
+    notModelled,
+    {},
+    `
+o100 sub
+^^^^^^^^ not-modelled: o100 sub steers the order of the blocks, which this check does not follow.
+M30
+`,
+  );
+});
+
+test('allows what an ordinary post writes', () => {
+  checkRule(
+    notModelled,
+    {},
+    `
+O1001 (DOOR)
+G21 G17 G90 G94 G54 G40 G49 G80
+T1 M6
+S18000 M3
+M8
+G0 X0 Y0
+G43 H1 Z5
+G1 Z1 F1000
+G2 X10 Y10 I10 J0
+G98 G81 X5 Y5 Z-5 R2
+G80
+M9
+G53 G0 Z0
+G91 G28 X0
+G90
+M1
+M30
+`,
+  );
+});

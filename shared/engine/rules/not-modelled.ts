@@ -1,0 +1,44 @@
+import { text } from './finding-data';
+import { reportProblem } from './report-problem';
+import { defineRule } from './rule';
+
+/** Something this check does not understand: from here on it may be blind. */
+export const notModelled = defineRule({
+  id: 'not-modelled',
+  group: 'reading',
+  title: 'A code this check does not model',
+  severity: 'stop',
+  protects: 'The run from being called clear on the strength of lines nobody checked.',
+  explanation:
+    'The block is left out and the walk goes on, so that one run lists everything. What the machine really does there is not known, and positions after it may differ. A code that only switches something beside the motion can be declared in the controller description as doing nothing.',
+  examples: {
+    bad: 'G21 G90 G54\nM250\nM30',
+    good: 'G21 G90 G54\nM8\nM30',
+  },
+  word: (data) => ({ message: describe(data), advice: advise(text(data, 'reason')) }),
+  observe: (_shop, report) => reportProblem(report, 'not-modelled'),
+});
+
+function describe(data: Parameters<typeof text>[0]): string {
+  const what = text(data, 'what');
+  switch (text(data, 'reason')) {
+    case 'computed':
+      return `${what} takes its value from an expression, which this check does not work out.`;
+    case 'parameter':
+      return `${what} sets a parameter, which this check does not follow.`;
+    case 'flow':
+      return `${what} steers the order of the blocks, which this check does not follow.`;
+    case 'no-reference':
+      return `${what} goes to a reference point that the machine description does not give.`;
+    default:
+      return `${what || 'This block'} is not modelled by this check.`;
+  }
+}
+
+function advise(reason: string): string {
+  if (reason === 'no-reference')
+    return 'Enter the stored reference point in the machine description, then check again.';
+  if (reason === 'computed' || reason === 'parameter' || reason === 'flow')
+    return 'Post the program with plain numbers and no jumps, or have a person prove this part.';
+  return 'Take it out if it is not needed, or declare in the controller description what it does.';
+}
