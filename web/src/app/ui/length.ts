@@ -26,8 +26,8 @@ export function toMm(value: number, units: Units): number {
 /** A length in millimetres as the bare number a form field shows in the person's units. */
 export function fromMm(mm: number, units: Units): number {
   if (units === 'mm') return mm;
-  // Five decimals of an inch are finer than the 0.001 mm the report rounds to.
-  return Number((mm / MM_PER_INCH).toFixed(5));
+  // Six decimals of an inch: a millimetre figure comes back the same to 0.0001 mm.
+  return Number((mm / MM_PER_INCH).toFixed(6));
 }
 
 function trimmed(value: number, decimals: number): string {
