@@ -1,20 +1,26 @@
 import type { LineWords } from '../lexer/line-words';
-import type { Block } from './block';
-import { LETTER, letterName } from './block';
-import { GROUP, NO_GROUP, codeName } from './code-groups';
+import { LETTER, letterBits, letterName, type Block } from './block';
+import { GROUP, NO_GROUP, TABLE_LENGTH, codeName } from './code-groups';
 
-/** How this controller sorts codes: built-in groups with what the setup declares taken out. */
-export interface CodeTable {
+/** How one controller sorts codes and reads numbers. */
+export interface BlockDialect {
   readonly g: Int8Array;
   readonly m: Int8Array;
+  /** Refuse what NISTIR 6556 refuses. */
   readonly isStrict: boolean;
+  /** Millimetres of one least increment where numbers without a point count them, else 0. */
+  readonly increment: number;
 }
 
-/** NISTIR 6556 3.2.5: no more than four M words a line. */
+/** NISTIR 6556 3.2.5. */
 const MOST_M_WORDS = 4;
+/** NISTIR 6556 3.2.1: five digits. */
+const HIGHEST_LINE_NUMBER = 99_999;
+/** NISTIR 6556 3.2.2.1: ten times a G number lies within this of a whole number. */
+const CODE_ROUNDING = 0.001;
 
-/** Sorts the words of a line into `block`; conflicts become faults of the line. */
-export function parseBlock(words: LineWords, block: Block, table: CodeTable): void {
+/** Sorts the words of a line into `block`; what cannot stand together becomes a fault of the line. */
+export function parseBlock(words: LineWords, block: Block, dialect: BlockDialect): void {
   const { letters, count } = words;
   block.groups = 0;
   block.mCount = 0;
@@ -24,8 +30,8 @@ export function parseBlock(words: LineWords, block: Block, table: CodeTable): vo
   let seen = 0;
   for (let word = 0; word < count; word++) {
     const letter = letters[word]!;
-    if (letter === LETTER.G) addG(words, block, table, word);
-    else if (letter === LETTER.M) addM(words, block, table, word);
+    if (letter === LETTER.G) addG(words, block, dialect, word);
+    else if (letter === LETTER.M) addM(words, block, dialect, word);
     else {
       const bit = 1 << letter;
       if ((seen & bit) !== 0) noteRepeated(words, letter, word);
@@ -34,58 +40,153 @@ export function parseBlock(words: LineWords, block: Block, table: CodeTable): vo
     }
   }
   block.seen = seen;
+  if ((seen & NUMBERED) !== 0) checkLineNumber(words, block, dialect);
+  if (dialect.increment > 0) countIncrements(words, dialect.increment);
+  if ((block.groups & CLAIMS) !== 0) checkClaims(words, block, dialect);
 }
 
-function addG(words: LineWords, block: Block, table: CodeTable, word: number): void {
+const NUMBERED = letterBits('N');
+
+function addG(words: LineWords, block: Block, dialect: BlockDialect, word: number): void {
   const scaled = words.values[word]! * 10;
   const tenths = Math.round(scaled);
-  // NISTIR 6556 3.2.2.1: ten times a G number lies within 0.001 of a whole number.
-  if (!(Math.abs(scaled - tenths) <= 0.001) || tenths < 0) return noteBadCode(words, 'G', word);
-  const group = tenths < table.g.length ? table.g[tenths]! : NO_GROUP;
-  if (group < 0) {
-    block.others.push({ letter: 'G', tenths, word });
-    return;
-  }
-  addCode(words, block, group, tenths, word);
+  if (!(Math.abs(scaled - tenths) <= CODE_ROUNDING) || tenths < 0)
+    return noteBadCode(words, 'G', word);
+  const group = tenths < TABLE_LENGTH ? dialect.g[tenths]! : NO_GROUP;
+  if (group < 0) block.others.push({ letter: 'G', tenths, word });
+  else addCode(block, group, tenths, word, dialect.isStrict);
 }
 
-function addM(words: LineWords, block: Block, table: CodeTable, word: number): void {
+function addM(words: LineWords, block: Block, dialect: BlockDialect, word: number): void {
   const value = words.values[word]!;
   const tenths = Math.round(value) * 10;
-  if (!(Math.abs(value * 10 - tenths) <= 0.001) || tenths < 0) return noteBadCode(words, 'M', word);
+  if (!(Math.abs(value * 10 - tenths) <= CODE_ROUNDING) || tenths < 0)
+    return noteBadCode(words, 'M', word);
   block.mCount++;
-  if (table.isStrict && block.mCount > MOST_M_WORDS)
+  if (dialect.isStrict && block.mCount > MOST_M_WORDS)
     noteConflict(words, word, { reason: 'm-words', most: MOST_M_WORDS });
-  const group = tenths < table.m.length ? table.m[tenths]! : NO_GROUP;
-  if (group < 0) {
-    block.others.push({ letter: 'M', tenths, word });
-    return;
-  }
-  if (group === GROUP.coolant && !table.isStrict && tenths !== 90) {
-    if (tenths === 70) block.mist = true;
-    else block.flood = true;
-    if (block.hasGroup(group) && block.codes[group] !== 90) return;
-  } else if (tenths === 70) block.mist = true;
-  else if (tenths === 80) block.flood = true;
-  addCode(words, block, group, tenths, word);
+  const group = tenths < TABLE_LENGTH ? dialect.m[tenths]! : NO_GROUP;
+  if (group < 0) block.others.push({ letter: 'M', tenths, word });
+  else addCode(block, group, tenths, word, dialect.isStrict);
 }
 
-function addCode(words: LineWords, block: Block, group: number, code: number, word: number): void {
-  const bit = 1 << group;
-  if ((block.groups & bit) !== 0) {
-    const letter = letterName(words.letters[word]!) as 'G' | 'M';
-    const other = codeName(letter, block.codes[group]!);
-    const same = other === codeName(letter, code);
-    // The same code twice says nothing new; it is refused only where the published language refuses it.
-    noteConflict(words, word, {
-      reason: same ? 'repeated-code' : 'same-group',
-      what: codeName(letter, code),
-      other,
-    });
+/** Puts a code into its group; a group that has one already is a conflict, and the later one holds. */
+export function addCode(
+  block: Block,
+  group: number,
+  code: number,
+  word: number,
+  isStrict: boolean,
+): void {
+  if (group === GROUP.coolant) {
+    if (code === 70) block.mist = true;
+    else if (code === 80) block.flood = true;
+    // Mist and flood may both be on; only the published language wants them on separate lines.
+    if (!isStrict && block.hasGroup(group) && code !== 90 && block.codes[group] !== 90) return;
   }
-  block.groups |= bit;
+  if (block.hasGroup(group) && group !== GROUP.idle) noteSameGroup(block, group, group, code, word);
+  // Cycles are a group of their own to router controllers; the published language has one group.
+  else if (isStrict && group === GROUP.motion && block.hasGroup(GROUP.cycle))
+    noteSameGroup(block, GROUP.cycle, group, code, word);
+  else if (isStrict && group === GROUP.cycle && block.hasGroup(GROUP.motion))
+    noteSameGroup(block, GROUP.motion, group, code, word);
+  block.groups |= 1 << group;
   block.codes[group] = code;
   block.codeWords[group] = word;
+}
+
+function noteSameGroup(
+  block: Block,
+  otherGroup: number,
+  group: number,
+  code: number,
+  word: number,
+): void {
+  const letter = letterName(block.words.letters[word]!);
+  const what = codeName(letter, code);
+  const other = codeName(letter, block.codes[otherGroup]!);
+  noteConflict(block.words, word, {
+    reason: otherGroup === group && what === other ? 'repeated-code' : 'same-group',
+    what,
+    other,
+  });
+}
+
+function checkLineNumber(words: LineWords, block: Block, dialect: BlockDialect): void {
+  const word = block.wordOf[LETTER.N]!;
+  const value = words.values[word]!;
+  if (dialect.isStrict && word > 0) {
+    words.fault({
+      problem: 'unreadable-block',
+      from: words.starts[word]!,
+      to: words.ends[word]!,
+      facts: { reason: 'line-number-first', what: block.written(word) },
+      voids: true,
+    });
+  }
+  const isFine =
+    0 <= value && Number.isInteger(value) && (!dialect.isStrict || value <= HIGHEST_LINE_NUMBER);
+  if (isFine) return;
+  words.fault({
+    problem: 'out-of-range-word',
+    from: words.starts[word]!,
+    to: words.ends[word]!,
+    facts: {
+      letter: 'N',
+      what: block.written(word),
+      value,
+      needs: value < 0 ? 'not-negative' : Number.isInteger(value) ? 'five-digits' : 'whole',
+    },
+    // A line number steers nothing here, so only a strict controller stops for it.
+    voids: dialect.isStrict,
+  });
+}
+
+/** Lengths and angles; counts, codes, feeds and times are whole as they stand (common practice, no source). */
+const INCREMENTAL_LETTERS = letterBits('ABCIJKQRUVWXYZ');
+
+function countIncrements(words: LineWords, increment: number): void {
+  for (let word = 0; word < words.count; word++) {
+    const letter = words.letters[word]!;
+    if (words.points[word] === 1 || (INCREMENTAL_LETTERS & (1 << letter)) === 0) continue;
+    const value = words.values[word]!;
+    if (value === 0) continue;
+    words.values[word] = value * increment;
+    words.fault({
+      problem: 'no-decimal-point',
+      from: words.starts[word]!,
+      to: words.ends[word]!,
+      facts: {
+        letter: letterName(letter),
+        what: words.text(words.starts[word]!, words.ends[word]!),
+        length: value * increment,
+      },
+      voids: false,
+    });
+  }
+}
+
+const CLAIMS = 1 << GROUP.once;
+/** G10, G28, G30 and the setting codes of G92 and G52 each want the axis words for themselves. */
+const CLAIMERS: readonly number[] = [100, 280, 281, 300, 301, 520, 920];
+
+/**
+ * One code that claims the axis words beside a motion code (NISTIR 6556 3.4). Posts write `G28 G0 Z0` and
+ * `G91 G28 G0 Z0` on safety lines, and every controller reads them the same way, so that one passes.
+ */
+function checkClaims(words: LineWords, block: Block, dialect: BlockDialect): void {
+  const code = block.codes[GROUP.once]!;
+  if (!CLAIMERS.includes(code)) return;
+  const hasCycle = block.hasGroup(GROUP.cycle) && block.codes[GROUP.cycle] !== 800;
+  if (!block.hasGroup(GROUP.motion) && !hasCycle) return;
+  const isHoming = code === 280 || code === 300;
+  if (!dialect.isStrict && isHoming && !hasCycle && block.codes[GROUP.motion] === 0) return;
+  const group = hasCycle ? GROUP.cycle : GROUP.motion;
+  noteConflict(words, block.codeWords[GROUP.once]!, {
+    reason: 'axis-words',
+    what: codeName('G', code),
+    other: codeName('G', block.codes[group]!),
+  });
 }
 
 function noteConflict(
@@ -113,12 +214,16 @@ function noteRepeated(words: LineWords, letter: number, word: number): void {
 }
 
 function noteBadCode(words: LineWords, letter: 'G' | 'M', word: number): void {
-  const what = words.text(words.starts[word]!, words.ends[word]!);
   words.fault({
     problem: 'out-of-range-word',
     from: words.starts[word]!,
     to: words.ends[word]!,
-    facts: { letter, what, value: words.values[word]!, needs: 'code' },
+    facts: {
+      letter,
+      what: words.text(words.starts[word]!, words.ends[word]!),
+      value: words.values[word]!,
+      needs: 'code',
+    },
     voids: true,
   });
 }

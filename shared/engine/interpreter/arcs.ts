@@ -1,8 +1,8 @@
 import { LETTER } from '../blocks/block';
 import type { Motion } from './events';
 import { PLANES } from './machine';
-import type { Target } from './motions';
-import { tellProblem, type Run } from './run';
+import { standAt, type Target } from './motions';
+import { refuse, tellProblem, type Run } from './run';
 
 const { I, J, K, R } = LETTER;
 const TURN = 2 * Math.PI;
@@ -15,11 +15,11 @@ const STRICT_TOLERANCE_INCH = 0.0002 * 25.4;
 /** Radii are compared after an addition and a root, so their last digits mean nothing. */
 const RADIUS_ROUNDING = 1e-9;
 
-/** Centre letters of each plane in plane order, and the third that has no meaning there. */
+/** Centre letters of each plane in plane order, the third that has no meaning there, and its axis letters. */
 const CENTRES = [
-  { u: I, v: J, other: K },
-  { u: K, v: I, other: J },
-  { u: J, v: K, other: I },
+  { u: I, v: J, other: K, ends: [LETTER.X, LETTER.Y] },
+  { u: K, v: I, other: J, ends: [LETTER.Z, LETTER.X] },
+  { u: J, v: K, other: I, ends: [LETTER.Y, LETTER.Z] },
 ] as const;
 
 /** Centre in plane order and radius, machine mm. */
@@ -29,8 +29,11 @@ export interface Circle {
   radius: number;
 }
 
-/** Carries out G2 (`turning` −1) or G3 (+1). Says false where the arc cannot be run at all. */
-export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): boolean {
+/**
+ * Carries out G2 (`turning` −1) or G3 (+1). Where the arc cannot be worked out that is told, and the walk
+ * goes on from its stated end.
+ */
+export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): void {
   const { machine, motion } = run;
   const index = machine.planeIndex;
   const fromU = index === 0 ? machine.x : index === 1 ? machine.z : machine.y;
@@ -38,7 +41,7 @@ export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): bo
   const toU = index === 0 ? to.x : index === 1 ? to.z : to.y;
   const toV = index === 0 ? to.y : index === 1 ? to.x : to.z;
   const circle = findCircle(run, turning, fromU, fromV, toU, toV);
-  if (!circle) return false;
+  if (!circle) return standAt(run, to);
   const startAngle = Math.atan2(fromV - circle.v, fromU - circle.u);
   const endAngle = Math.atan2(toV - circle.v, toU - circle.u);
   const turn = findTurn(turning, startAngle, endAngle, fromU === toU && fromV === toV);
@@ -63,13 +66,12 @@ export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): bo
   const along = circle.radius * turn;
   motion.length = Math.sqrt(along * along + depth * depth);
   motion.moves = motion.length !== 0;
-  motion.feed = feed;
+  motion.feed = machine.feedMode === 'inverse-time' ? feed * motion.length : feed;
   machine.x = to.x;
   machine.y = to.y;
   machine.z = to.z;
   machine.a = to.a;
   run.tell.motion(motion);
-  return true;
 }
 
 function findTurn(turning: 1 | -1, start: number, end: number, isFull: boolean): number {
@@ -90,21 +92,25 @@ function findCircle(
   toV: number,
 ): Circle | undefined {
   const { block } = run;
+  const { plane } = run.machine;
   const letters = CENTRES[run.machine.planeIndex]!;
   const hasCentre = block.has(letters.u) || block.has(letters.v);
-  if (block.has(letters.other))
-    tellProblem(
-      run,
-      'arc-impossible',
-      { letters: 'IJK' },
-      {
-        reason: 'centre-letter',
-        what: String.fromCharCode(65 + letters.other),
-        plane: run.machine.plane,
-      },
-    );
+  // Posts write the third centre word as nought on a helix; any other value is a slip of the plane.
+  if (block.has(letters.other) && (run.dialect.isStrict || block.value(letters.other) !== 0)) {
+    const what = block.written(block.wordOf[letters.other]!);
+    refuse(run, 'arc-impossible', { letters: 'IJK' }, { reason: 'centre-letter', what, plane });
+    return undefined;
+  }
   if (block.has(R) && hasCentre) {
-    tellProblem(run, 'arc-impossible', { letters: 'IJKR' }, { reason: 'radius-and-centre' });
+    refuse(run, 'arc-impossible', { letters: 'IJKR' }, { reason: 'radius-and-centre' });
+    return undefined;
+  }
+  if (run.dialect.isStrict && !letters.ends.some((letter) => block.has(letter))) {
+    const code = run.machine.motionMode;
+    refuse(run, 'missing-word', undefined, {
+      code,
+      letter: `${plane[0]} or ${plane[1]}`.toUpperCase(),
+    });
     return undefined;
   }
   if (block.has(R)) return circleByRadius(run, turning, fromU, fromV, toU, toV);

@@ -51,6 +51,9 @@ export class Broadcaster {
   get wantsComments(): boolean {
     return this.comments.length > 0;
   }
+  get wantsModals(): boolean {
+    return this.modals.length > 0;
+  }
 
   block(): void {
     for (const each of this.blocks) each.block(this.state);

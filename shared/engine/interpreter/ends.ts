@@ -1,12 +1,12 @@
-import type { StopEvent } from './events';
+import type { ProgramEndEvent, StopEvent } from './events';
 import type { Run } from './run';
 
 export function stopProgram(run: Run, code: StopEvent['code']): void {
   run.tell.stop({ code, place: run.machine.place({ code }) });
 }
 
-/** Tells the end before its resets. */
-export function endProgram(run: Run, code: 'M2' | 'M30' | 'M99' | '%'): void {
+/** Told before the end code resets anything; nothing after it is carried out, so nothing is reset. */
+export function endProgram(run: Run, code: Exclude<ProgramEndEvent['code'], 'end-of-text'>): void {
   run.tell.programEnd({ code, place: run.machine.place({ code }) });
   run.endedBy = code;
 }

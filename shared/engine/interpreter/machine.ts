@@ -56,16 +56,16 @@ export class Machine implements MachineState {
   originX: number | undefined = undefined;
   originY: number | undefined = undefined;
   originZ: number | undefined = undefined;
-  originA: number | undefined = undefined;
   shiftX = 0.5;
   shiftY = 0.5;
   shiftZ = 0.5;
-  shiftA = 0.5;
   /** Machine position of program zero: origin and shift, and on Z the length offset. */
   baseX = 0.5;
   baseY = 0.5;
   baseZ = 0.5;
   baseA = 0.5;
+  /** Bits (1 X, 2 Y, 4 Z) of axes whose active origin has no value. */
+  unsetAxes = 0;
   selectedTool: number | null = null;
   readonly held = new Held();
   changed = false;
@@ -119,8 +119,9 @@ export class Machine implements MachineState {
     this.settings[at + 2] = to;
   }
 
-  forgetSet(setting: number): void {
-    this.settings[setting * KEPT] = 0;
+  /** Whether any word has set this state yet. */
+  isSet(setting: number): boolean {
+    return this.settings[setting * KEPT] !== 0;
   }
 
   setAt(what: SettableState): Place | undefined {

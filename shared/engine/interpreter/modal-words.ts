@@ -2,7 +2,9 @@ import { LETTER } from '../blocks/block';
 import { GROUP, codeName } from '../blocks/code-groups';
 import type { SettableState } from './events';
 import { SETTING } from './machine';
-import { tellProblem, type Run } from './run';
+import { refuseWhileCompensating } from './one-block-codes';
+import { refuse, type Run } from './run';
+import { wholeNumber } from './whole-number';
 
 /** Steps of a block that only set a mode: no axis moves in any of them. */
 
@@ -11,51 +13,49 @@ export function applyFeedMode(run: Run): void {
   const code = block.codes[GROUP.feedMode]!;
   const mode = code === 930 ? 'inverse-time' : code === 950 ? 'per-revolution' : 'per-minute';
   setModal(run, 'feedMode', GROUP.feedMode, machine.feedMode, mode);
+  if (machine.feedMode !== mode) machine.feed = NaN;
   machine.feedMode = mode;
 }
 
-/** F, in mm/min under G94; under G93 a rate, under G95 mm a turn: then it is kept as written in mm. */
+/**
+ * F, kept in mm/min under G94, per minute of the move under G93, in mm a turn under G95. A G20 or G21 in
+ * the same block counts already, because that is how it is meant wherever both are written.
+ */
 export function applyFeed(run: Run): void {
   const { block, machine } = run;
   const written = block.value(LETTER.F);
-  if (written < 0) return refuseNegative(run, 'F', written);
+  if (!(written >= 0)) return refuseNegative(run, LETTER.F);
   const unit = block.hasGroup(GROUP.units) ? unitOf(block.codes[GROUP.units]!) : machine.unit;
   const feed = machine.feedMode === 'inverse-time' ? written : written * unit;
-  if (feed !== machine.feed) {
-    machine.feed = feed;
-    machine.noteSet(SETTING.feed, block.wordOf[LETTER.F]!);
-  }
+  if (feed === machine.feed) return;
+  machine.feed = feed;
+  machine.noteSet(SETTING.feed, block.wordOf[LETTER.F]!);
 }
 
 export function applySpeed(run: Run): void {
   const { block, machine } = run;
   const speed = block.value(LETTER.S);
-  if (speed < 0) return refuseNegative(run, 'S', speed);
+  if (!(speed >= 0)) return refuseNegative(run, LETTER.S);
+  // G92 S and G50 S limit the speed and do not set it (common practice, no source).
+  if (block.hasGroup(GROUP.once) && block.codes[GROUP.once] === 920) return;
+  if (block.hasGroup(GROUP.idle) && block.codes[GROUP.idle] === 500) return;
   machine.speed = speed;
   machine.noteSet(SETTING.speed, block.wordOf[LETTER.S]!);
-  if (machine.turning !== 'off' && !block.hasGroup(GROUP.spindle))
-    run.tell.spindle({
-      turning: machine.turning,
-      speed,
-      code: 'S',
-      place: machine.place({ letters: 'S' }),
-    });
+  if (machine.turning === 'off' || block.hasGroup(GROUP.spindle)) return;
+  const { turning } = machine;
+  run.tell.spindle({ turning, speed, code: 'S', place: machine.place({ letters: 'S' }) });
 }
 
-function refuseNegative(run: Run, letter: string, value: number): void {
-  tellProblem(
-    run,
-    'out-of-range-word',
-    { letters: letter },
-    {
-      letter,
-      what: letter,
-      value,
-      needs: 'not-negative',
-    },
-  );
+export function refuseNegative(run: Run, letter: number): void {
+  const { block } = run;
+  const name = String.fromCharCode(65 + letter);
+  const value = block.value(letter);
+  const what = block.written(block.wordOf[letter]!);
+  const needs = value < 0 ? 'not-negative' : 'whole';
+  refuse(run, 'out-of-range-word', { letters: name }, { letter: name, what, value, needs });
 }
 
+/** M3, M4, M5; M19 orients a spindle and so stands it still. */
 export function applySpindle(run: Run): void {
   const { block, machine } = run;
   const code = block.codes[GROUP.spindle]!;
@@ -66,15 +66,14 @@ export function applySpindle(run: Run): void {
     turning: machine.turning,
     speed: machine.speed,
     code: name,
-    place: machine.place({ letters: code === 50 ? '' : 'S', code: name }),
+    place: machine.place({ letters: machine.turning === 'off' ? '' : 'S', code: name }),
   });
 }
 
 export function applyCoolant(run: Run): void {
   const { block, machine } = run;
   const { coolant } = machine;
-  const isOff = block.codes[GROUP.coolant] === 90;
-  if (isOff) coolant.mist = coolant.flood = false;
+  if (block.codes[GROUP.coolant] === 90) coolant.mist = coolant.flood = false;
   if (block.mist) coolant.mist = true;
   if (block.flood) coolant.flood = true;
   machine.noteSet(SETTING.coolant, block.codeWords[GROUP.coolant]!);
@@ -85,6 +84,7 @@ export function applyCoolant(run: Run): void {
 export function applyPlane(run: Run): void {
   const { block, machine } = run;
   const index = block.codes[GROUP.plane]! / 10 - 17;
+  if (index !== 0 && refuseWhileCompensating(run, codeName('G', block.codes[GROUP.plane]!))) return;
   const before = machine.plane;
   machine.planeIndex = index;
   setModal(run, 'plane', GROUP.plane, before, machine.plane);
@@ -94,9 +94,56 @@ export const unitOf = (code: number): number => (code === 200 ? 25.4 : 1);
 
 export function applyUnits(run: Run): void {
   const { block, machine } = run;
+  const code = block.codes[GROUP.units]!;
+  if (refuseWhileCompensating(run, codeName('G', code))) return;
   const before = machine.units;
-  machine.unit = unitOf(block.codes[GROUP.units]!);
+  machine.unit = unitOf(code);
   setModal(run, 'units', GROUP.units, before, machine.units);
+}
+
+/** G40, G41, G42. The offset path itself is not worked out yet, and that is said at G41 and G42. */
+export function applyCompensation(run: Run): void {
+  const { block, machine } = run;
+  const code = block.codes[GROUP.compensation]!;
+  const name = codeName('G', code);
+  const side = code === 410 ? 'left' : code === 420 ? 'right' : 'off';
+  if (side !== 'off') {
+    if (run.dialect.isStrict && refuseWhileCompensating(run, name)) return;
+    if (machine.planeIndex !== 0)
+      return refuse(
+        run,
+        'compensation-entry',
+        { code: name },
+        { reason: 'plane', plane: machine.plane },
+      );
+  }
+  const number = side === 'off' ? null : readDiameterNumber(run);
+  if (run.refused) return;
+  setModal(run, 'compensation', GROUP.compensation, machine.compensation, side);
+  machine.compensation = side;
+  const place = machine.place({ letters: 'D', code: name });
+  if (side !== 'off') run.tell.problem({ problem: 'not-modelled', place, facts: { what: name } });
+  run.tell.compensation({ side, number, place });
+}
+
+function readDiameterNumber(run: Run): number | null {
+  const { block, shop } = run;
+  if (!block.has(LETTER.D)) return null;
+  const number = wholeNumber(block.value(LETTER.D));
+  if (!(number >= 0)) refuseNegative(run, LETTER.D);
+  else if (number !== 0 && shop.setup.offsets.diameter[String(number)] === undefined)
+    refuse(
+      run,
+      'out-of-range-word',
+      { letters: 'D' },
+      {
+        letter: 'D',
+        what: block.written(block.wordOf[LETTER.D]!),
+        value: number,
+        needs: 'in-table',
+      },
+    );
+  return number;
 }
 
 export function applyPath(run: Run): void {
@@ -129,8 +176,13 @@ export function setModal(
   to: string,
 ): void {
   const { block, machine } = run;
-  const code = codeName('G', block.codes[group]!);
-  if (from !== to || machine.setAt(what) === undefined)
-    machine.noteSet(SETTING[what], block.codeWords[group]!);
-  run.tell.modal({ what, from, to, place: machine.place({ code }) });
+  const word = block.codeWords[group]!;
+  if (from !== to || !machine.isSet(SETTING[what])) machine.noteSet(SETTING[what], word);
+  if (run.tell.wantsModals)
+    run.tell.modal({
+      what,
+      from,
+      to,
+      place: machine.place({ code: codeName('G', block.codes[group]!) }),
+    });
 }

@@ -1,18 +1,31 @@
 import { LETTER } from '../blocks/block';
 import type { Motion } from './events';
-import { PLANES } from './machine';
 import { tellProblem, type Run } from './run';
 
 const { X, Y, Z, A } = LETTER;
-const AXIS_BITS = (1 << X) | (1 << Y) | (1 << Z) | (1 << A);
+const X_BIT = 1 << X;
+const Y_BIT = 1 << Y;
+const Z_BIT = 1 << Z;
+const A_BIT = 1 << A;
+const AXIS_BITS = X_BIT | Y_BIT | Z_BIT | A_BIT;
+/** In the order in which offsets keep their axes. */
+export const AXIS_LETTERS = [X, Y, Z, A] as const;
 
 export const hasAxisWord = (seen: number): boolean => (seen & AXIS_BITS) !== 0;
 
 /** Bit 1 X, 2 Y, 4 Z, 8 A, from a block's letters. */
-export const namedAxes = (seen: number): number => ((seen >>> X) & 7) | ((seen & 1) << 3);
+export const namedAxes = (seen: number): number => ((seen >>> X) & 7) | ((seen & A_BIT) << 3);
 
+/** A point of the gauge point in machine mm, A in degrees. */
+export interface Target {
+  x: number;
+  y: number;
+  z: number;
+  a: number;
+}
+
+/** Every number starts as a fraction, so that the field is kept as a double from the first motion on. */
 export function emptyMotion(): Motion {
-  // Fractions, so that every field is kept as a double from the start.
   return {
     kind: 'rapid',
     by: 'program',
@@ -44,37 +57,47 @@ export function emptyMotion(): Motion {
   };
 }
 
-/** Where the block's axis words lead, in machine mm. Reused; read at once. */
-export const readTarget = (run: Run, target: Target): Target => {
+/** Where the block's axis words lead from here. Returns `target`, filled. */
+export function readTarget(run: Run, target: Target): Target {
   const { block, machine } = run;
   const { values } = block.words;
+  const { wordOf, seen } = block;
   const { unit } = machine;
-  const { seen } = block;
-  if (machine.isAbsolute) {
-    target.x =
-      (seen & (1 << X)) !== 0 ? values[block.wordOf[X]!]! * unit + machine.baseX : machine.x;
-    target.y =
-      (seen & (1 << Y)) !== 0 ? values[block.wordOf[Y]!]! * unit + machine.baseY : machine.y;
-    target.z =
-      (seen & (1 << Z)) !== 0 ? values[block.wordOf[Z]!]! * unit + machine.baseZ : machine.z;
-    target.a = (seen & 1) !== 0 ? values[block.wordOf[A]!]! + machine.baseA : machine.a;
-  } else {
-    target.x = (seen & (1 << X)) !== 0 ? values[block.wordOf[X]!]! * unit + machine.x : machine.x;
-    target.y = (seen & (1 << Y)) !== 0 ? values[block.wordOf[Y]!]! * unit + machine.y : machine.y;
-    target.z = (seen & (1 << Z)) !== 0 ? values[block.wordOf[Z]!]! * unit + machine.z : machine.z;
-    target.a = (seen & 1) !== 0 ? values[block.wordOf[A]!]! + machine.a : machine.a;
-  }
+  const isAbsolute = machine.isAbsolute;
+  target.x = machine.x;
+  target.y = machine.y;
+  target.z = machine.z;
+  target.a = machine.a;
+  if ((seen & X_BIT) !== 0)
+    target.x = values[wordOf[X]!]! * unit + (isAbsolute ? machine.baseX : machine.x);
+  if ((seen & Y_BIT) !== 0)
+    target.y = values[wordOf[Y]!]! * unit + (isAbsolute ? machine.baseY : machine.y);
+  if ((seen & Z_BIT) !== 0)
+    target.z = values[wordOf[Z]!]! * unit + (isAbsolute ? machine.baseZ : machine.z);
+  if ((seen & A_BIT) !== 0)
+    target.a = values[wordOf[A]!]! + (isAbsolute ? machine.baseA : machine.a);
   return target;
-};
-
-export interface Target {
-  x: number;
-  y: number;
-  z: number;
-  a: number;
 }
 
-/** Moves in a straight line, tells it, and stands at its end. */
+/** G53: the axis words are machine coordinates, whatever G90 or G91 says. */
+export function readMachineTarget(run: Run, target: Target): Target {
+  const { block, machine } = run;
+  target.x = block.has(X) ? block.value(X) * machine.unit : machine.x;
+  target.y = block.has(Y) ? block.value(Y) * machine.unit : machine.y;
+  target.z = block.has(Z) ? block.value(Z) * machine.unit : machine.z;
+  target.a = block.has(A) ? block.value(A) : machine.a;
+  return target;
+}
+
+/** Stands at the end of a motion that could not be worked out; nothing is told of the way there. */
+export function standAt({ machine }: Run, to: Target): void {
+  machine.x = to.x;
+  machine.y = to.y;
+  machine.z = to.z;
+  machine.a = to.a;
+}
+
+/** Moves in a straight line, tells it, and stands at its end. `feed` is NaN on rapids. */
 export function moveStraight(
   run: Run,
   kind: Motion['kind'],
@@ -86,44 +109,46 @@ export function moveStraight(
   const fromX = machine.x;
   const fromY = machine.y;
   const fromZ = machine.z;
+  const { x, y, z } = to;
   motion.kind = kind;
   motion.by = by;
   motion.fromX = fromX;
   motion.fromY = fromY;
   motion.fromZ = fromZ;
   motion.fromA = machine.a;
-  motion.toX = to.x;
-  motion.toY = to.y;
-  motion.toZ = to.z;
+  motion.toX = x;
+  motion.toY = y;
+  motion.toZ = z;
   motion.toA = to.a;
-  motion.minX = fromX < to.x ? fromX : to.x;
-  motion.maxX = fromX < to.x ? to.x : fromX;
-  motion.minY = fromY < to.y ? fromY : to.y;
-  motion.maxY = fromY < to.y ? to.y : fromY;
-  motion.minZ = fromZ < to.z ? fromZ : to.z;
-  motion.maxZ = fromZ < to.z ? to.z : fromZ;
-  const dx = to.x - fromX;
-  const dy = to.y - fromY;
-  const dz = to.z - fromZ;
+  motion.minX = fromX < x ? fromX : x;
+  motion.maxX = fromX < x ? x : fromX;
+  motion.minY = fromY < y ? fromY : y;
+  motion.maxY = fromY < y ? y : fromY;
+  motion.minZ = fromZ < z ? fromZ : z;
+  motion.maxZ = fromZ < z ? z : fromZ;
+  const dx = x - fromX;
+  const dy = y - fromY;
+  const dz = z - fromZ;
   const squared = dx * dx + dy * dy + dz * dz;
-  motion.moves = squared !== 0;
-  motion.length = squared !== 0 ? Math.sqrt(squared) : Math.abs(to.a - machine.a);
-  motion.feed = feed;
-  machine.x = to.x;
-  machine.y = to.y;
-  machine.z = to.z;
+  const moves = squared !== 0;
+  const length = moves ? Math.sqrt(squared) : Math.abs(to.a - machine.a);
+  motion.moves = moves;
+  motion.length = length;
+  // Under G93 the F word is the inverse of the minutes the move takes.
+  motion.feed = machine.feedMode === 'inverse-time' ? feed * length : feed;
+  machine.x = x;
+  machine.y = y;
+  machine.z = z;
   machine.a = to.a;
   run.tell.motion(motion);
 }
 
-export function setArcParts(motion: Motion, planeIndex: number): void {
-  motion.plane = PLANES[planeIndex]!;
-}
-
-/** A program coordinate in an offset that has no value: told once an offset. */
-export function tellUnsetOffset(run: Run): void {
-  const { machine } = run;
-  if (run.toldUnset.has(machine.workOffset)) return;
-  run.toldUnset.add(machine.workOffset);
-  tellProblem(run, 'work-offset-unset', { letters: 'XYZ' }, { offset: machine.workOffset });
+/** A program coordinate on an axis whose offset has no value: told once an offset. */
+export function tellIfUnset(run: Run, named: number): void {
+  const { machine, toldUnset } = run;
+  const unset = machine.unsetAxes & named;
+  if (unset === 0 || toldUnset.has(machine.workOffset)) return;
+  toldUnset.add(machine.workOffset);
+  const letters = (unset & 1 ? 'X' : '') + (unset & 2 ? 'Y' : '') + (unset & 4 ? 'Z' : '');
+  tellProblem(run, 'work-offset-unset', { letters }, { offset: machine.workOffset, axes: letters });
 }

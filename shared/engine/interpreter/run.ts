@@ -1,42 +1,61 @@
 import type { Block } from '../blocks/block';
-import type { DeclaredCode, Setup } from '../shop/setup';
+import type { BlockDialect } from '../blocks/parse-block';
+import type { DeclaredCode, Point, Setup } from '../shop/setup';
 import type { Shop } from '../shop/shop';
-import type { Broadcaster } from './broadcaster';
-import type { Problem, Words } from './events';
-import type { Machine } from './machine';
-import type { Motion } from './events';
 import type { Circle } from './arcs';
+import type { Broadcaster } from './broadcaster';
+import type { CycleMemory } from './cycle-words';
+import type { Motion, Place, Problem, Words } from './events';
+import type { Machine } from './machine';
 import type { Target } from './motions';
+import type { SavedState } from './saved-state';
 import type { WorkOffsets } from './work-offsets';
-import type { CycleMemory } from './cycles';
 
 /** What every part of the interpreter works on: one walk of one program over one machine. */
 export interface Run {
   readonly shop: Shop;
   readonly controller: Setup['controller'];
+  readonly dialect: BlockDialect;
   readonly block: Block;
   readonly machine: Machine;
   readonly tell: Broadcaster;
   readonly offsets: WorkOffsets;
+  /** Length offsets by number, mm; G10 L1 may change them. */
+  readonly lengths: Map<number, number>;
+  /** The stored points of G28 and G30; their .1 forms change them. */
+  readonly references: { g28: Point | undefined; g30: Point | undefined };
   readonly cycle: CycleMemory;
-  readonly motion: Motion;
   /** Scratch, so that motion allocates nothing. */
+  readonly motion: Motion;
   readonly target: Target;
   readonly circle: Circle;
   readonly declared: ReadonlyMap<string, readonly DeclaredCode[]>;
-  /** Offsets whose missing value has been told once. */
+  readonly saved: SavedState[];
+  /** Work offsets whose missing value has been told. */
   readonly toldUnset: Set<string>;
+  /** A G53 or G28 that stood without axis words in the block before, until the next block is known. */
+  loneMachineMove: { readonly code: string; readonly place: Place } | undefined;
+  /** Whether anything was called, so that blocks after the end may be what was called. */
+  callsMade: boolean;
   /** The end code met, or '' while the program runs. */
   endedBy: '' | 'M2' | 'M30' | 'M99' | '%';
   /** Whether the block has been refused part-way, so that nothing more of it is carried out. */
   refused: boolean;
 }
 
+export type Facts = Readonly<Record<string, string | number | boolean | null>>;
+
 export function tellProblem(
   run: Run,
   problem: Problem,
   words: Words | undefined,
-  facts: Readonly<Record<string, string | number | boolean | null>>,
+  facts: Facts,
 ): void {
   run.tell.problem({ problem, place: run.machine.place(words), facts });
+}
+
+/** Tells it and leaves the rest of the block undone. */
+export function refuse(run: Run, problem: Problem, words: Words | undefined, facts: Facts): void {
+  tellProblem(run, problem, words, facts);
+  run.refused = true;
 }

@@ -1,63 +1,90 @@
 import { LETTER } from '../blocks/block';
 import { GROUP } from '../blocks/code-groups';
 import type { ToolChangedEvent } from './events';
+import { hold } from './held-tool';
 import { SETTING } from './machine';
-import { tellProblem, type Run } from './run';
-
-/** A whole number within 0.0001 (NISTIR 6556 3.2.2.1), or NaN. */
-export function wholeNumber(value: number): number {
-  const whole = Math.round(value);
-  return Math.abs(value - whole) <= 0.0001 ? whole : NaN;
-}
+import { refuseNegative } from './modal-words';
+import { applyLengthOfHeld } from './offset-words';
+import { refuse, tellProblem, type Run } from './run';
+import { wholeNumber } from './whole-number';
 
 /** T: chooses what the next change fetches; moves nothing. */
 export function selectTool(run: Run): void {
-  const { block, machine } = run;
-  const written = block.value(LETTER.T);
-  const number = wholeNumber(written);
-  if (!(number >= 0)) {
-    tellProblem(
+  const { block, machine, controller, shop } = run;
+  const number = wholeNumber(block.value(LETTER.T));
+  if (!(number >= 0)) return refuseNegative(run, LETTER.T);
+  const word = block.wordOf[LETTER.T]!;
+  if (controller.toolWord === 'pocket' && number !== 0 && !shop.pocketByNumber.has(number))
+    return refuse(
       run,
       'out-of-range-word',
       { letters: 'T' },
       {
         letter: 'T',
-        what: 'T',
-        value: written,
-        needs: written < 0 ? 'not-negative' : 'whole',
+        what: block.written(word),
+        value: number,
+        needs: 'pocket',
       },
     );
-    run.refused = true;
-    return;
-  }
   machine.selectedTool = number;
-  machine.noteSet(SETTING.selectedTool, block.wordOf[LETTER.T]!);
+  machine.noteSet(SETTING.selectedTool, word);
   run.tell.toolSelected({ number, place: machine.place({ letters: 'T' }) });
 }
 
 /** M6, or T where T itself changes. */
 export function changeTool(run: Run): void {
-  const { block, machine, controller } = run;
-  const selectedHere = block.has(LETTER.T);
-  if (machine.selectedTool === null) {
-    tellProblem(run, 'change-without-tool', { code: 'M6' }, {});
-    return;
-  }
-  if (controller.toolChange === 'ignored') return;
+  const { machine, controller } = run;
   const written = machine.selectedTool;
+  const code = controller.changeOn;
+  if (written === null)
+    return tellProblem(
+      run,
+      'change-without-tool',
+      { code: 'M6' },
+      { code, reason: 'never-selected' },
+    );
+  checkOrder(run);
+  if (controller.toolChange === 'ignored') return;
   if (written === 0 && controller.toolZero === 'ignored') return;
+  if (written === 0 && controller.toolZero === 'refused')
+    return refuse(
+      run,
+      'out-of-range-word',
+      { letters: 'T', code: 'M6' },
+      {
+        letter: 'T',
+        what: 'T0',
+        value: 0,
+        needs: 'tool',
+      },
+    );
+  carryOutChange(run, written);
+}
+
+/**
+ * `M6 T2`: words of a block have no order in the published language, but a macro-dialect control acts on
+ * M6 as it reads it and loads what was chosen before (common practice, no source).
+ */
+function checkOrder(run: Run): void {
+  const { block, controller } = run;
+  if (controller.language !== 'custom-macro' || !block.has(LETTER.T)) return;
+  if (!block.hasGroup(GROUP.change)) return;
+  if (block.codeWords[GROUP.change]! < block.wordOf[LETTER.T]!)
+    tellProblem(run, 'number-order', { letters: 'T', code: 'M6' }, { tool: block.value(LETTER.T) });
+}
+
+function carryOutChange(run: Run, written: number): void {
+  const { block, machine, controller } = run;
+  const { known, number, tool } = machine.held;
   const to = toolMeant(run, written);
+  const selectedHere = block.has(LETTER.T);
   const event: ToolChangedEvent = {
-    from: { known: machine.held.known, number: machine.held.number, tool: machine.held.tool },
+    from: { known, number, tool },
     to,
-    tool: to === null ? undefined : run.shop.toolByNumber.get(to),
+    tool: run.shop.toolByNumber.get(to),
     written,
     selectedHere,
-    place: machine.place(
-      block.hasGroup(GROUP.change)
-        ? { letters: selectedHere ? 'T' : '', code: 'M6' }
-        : { letters: 'T' },
-    ),
+    place: machine.place({ letters: selectedHere ? 'T' : '', code: 'M6' }),
     turningBefore: machine.turning,
   };
   run.tell.toolChanging(event);
@@ -69,19 +96,14 @@ export function changeTool(run: Run): void {
   }
   machine.changed = true;
   hold(run, to);
-  if (controller.changeStopsSpindle || controller.switches.strict) machine.turning = 'off';
+  if (controller.changeStopsSpindle) machine.turning = 'off';
+  if (controller.lengthOffset !== 'program')
+    applyLengthOfHeld(run, block.has(LETTER.T) ? block.wordOf[LETTER.T]! : -1);
   run.tell.toolChanged(event);
 }
 
-/** The tool a T value means; a place where T names pockets. Null where the pocket's tool is not known. */
-function toolMeant(run: Run, written: number): number | null {
-  if (run.controller.toolWord === 'tool' || written === 0) return written;
-  return run.shop.toolOfPocket.get(written) ?? 0;
-}
-
-export function hold(run: Run, number: number | null): void {
-  const { held } = run.machine;
-  held.known = number !== null;
-  held.number = number;
-  held.tool = number === null ? undefined : run.shop.toolByNumber.get(number);
+/** The tool a T value means: a place where T names pockets, and an empty pocket holds nothing. */
+function toolMeant({ controller, shop }: Run, written: number): number {
+  if (controller.toolWord === 'tool' || written === 0) return written;
+  return shop.toolOfPocket.get(written) ?? 0;
 }

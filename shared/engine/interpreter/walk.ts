@@ -1,21 +1,17 @@
 import { Block } from '../blocks/block';
-import { G_GROUP_OF, M_GROUP_OF } from '../blocks/code-groups';
-import { parseBlock, type CodeTable } from '../blocks/parse-block';
+import { addCode, parseBlock } from '../blocks/parse-block';
+import { codeName, groupTables } from '../blocks/code-groups';
 import { LineWords } from '../lexer/line-words';
 import { readLine } from '../lexer/read-line';
 import type { Shop } from '../shop/shop';
 import { LONGEST_LINE, LineSource, type LineReader } from '../source/line-source';
-import { Broadcaster } from './broadcaster';
-import { emptyCycle } from './cycles';
+import { findDeclared } from './declared-codes';
 import { endProgram } from './ends';
 import type { Observer, Place } from './events';
 import { carryOut } from './interpreter';
-import { Machine, NO_MOTION } from './machine';
-import { emptyMotion } from './motions';
-import { placeProgramZero } from './offset-words';
-import type { Run } from './run';
-import { hold } from './tool-change';
-import { WorkOffsets } from './work-offsets';
+import { openRun } from './open-run';
+import { tellProblem, type Run } from './run';
+import { carryOutUnknown } from './unknown-codes';
 
 export interface WalkOptions {
   /** Whether blocks with a `/` in front are skipped. */
@@ -26,17 +22,21 @@ export interface WalkOptions {
 export class Walk implements LineReader {
   /** Lines begun so far. */
   linesRead = 0;
-  /** Lines with at least one word. */
+  /** Lines with at least one word, run or not. */
   blocks = 0;
   /** The first block with a `/` in front. */
   firstSkippable: Place | undefined;
   private readonly source = new LineSource(this);
   private readonly words = new LineWords();
   private readonly block = new Block(this.words);
-  private readonly table: CodeTable;
   private readonly run: Run;
+  private readonly builtIn: ReturnType<typeof groupTables>;
+  private readonly longestBlock: number;
   private isDone = false;
-  private percentSeen = false;
+  private isFramed = false;
+  private isTextAfterTold = false;
+  /** Whether any block said more than a number. */
+  private isEmpty = true;
   private lastWritten = 1;
 
   constructor(
@@ -44,24 +44,29 @@ export class Walk implements LineReader {
     observers: readonly Observer[],
     private readonly options: WalkOptions,
   ) {
-    this.table = codeTable(shop);
     this.run = openRun(shop, this.block, observers);
+    this.builtIn = groupTables(this.run.dialect.isStrict);
+    this.longestBlock = shop.setup.controller.longestBlock;
   }
 
   push(bytes: Uint8Array): void {
     this.source.push(bytes);
   }
 
+  /** Tells what is only known once the text is over. */
   endOfText(): void {
     this.source.end();
-    const { machine, tell, endedBy } = this.run;
+    const { run } = this;
+    const { machine, tell, endedBy } = run;
     this.words.clear(new Uint8Array(0), 0);
     machine.line = this.lastWritten;
-    if (this.blocks === 0)
-      tell.problem({ problem: 'empty-program', place: machine.place(), facts: {} });
-    else if (endedBy === '' || endedBy === '%')
-      tell.problem({ problem: 'missing-end', place: machine.place(), facts: {} });
-    if (endedBy === '') tell.programEnd({ code: 'end-of-text', place: machine.place() });
+    const place = machine.place();
+    if (this.isEmpty) tell.problem({ problem: 'empty-program', place, facts: {} });
+    else if (endedBy === '' && this.isFramed)
+      tell.problem({ problem: 'cut-short', place, facts: { reason: 'percent' } });
+    if (!this.isEmpty && (endedBy === '' || endedBy === '%'))
+      tell.problem({ problem: 'missing-end', place, facts: { percent: endedBy === '%' } });
+    if (endedBy === '') tell.programEnd({ code: 'end-of-text', place });
   }
 
   readLines(bytes: Uint8Array, at: number, end: number): void {
@@ -86,64 +91,117 @@ export class Walk implements LineReader {
   }
 
   private tellOverlong(length: number): void {
-    const { machine, tell } = this.run;
-    this.lastWritten = machine.line = this.linesRead;
-    this.words.clear(this.words.bytes, 0);
-    this.words.end = 0;
+    const { words, run } = this;
+    words.clear(words.bytes, 0);
+    words.end = 0;
+    this.lastWritten = run.machine.line = this.linesRead;
     this.blocks++;
-    tell.problem({
-      problem: 'unreadable-block',
-      place: machine.place(),
-      facts: { reason: 'too-long', length, most: LONGEST_LINE },
-    });
-    tell.block();
+    this.isEmpty = false;
+    if (this.isDone) return;
+    const facts = { reason: 'too-long', length, most: LONGEST_LINE };
+    tellProblem(run, 'unreadable-block', undefined, facts);
+    run.tell.block();
   }
 
   private takeLine(): void {
     const { words, run } = this;
+    if (words.end === words.start) return;
     run.machine.line = this.linesRead;
-    if (words.end > words.start) this.lastWritten = this.linesRead;
+    this.lastWritten = this.linesRead;
     if (words.percentAt >= 0) this.takePercent();
-    if (words.count === 0 && words.faults.length === 0) {
-      if (words.comments.length > 0 && !this.isDone) this.tellComments();
-      return;
-    }
+    const hasWords = words.count > 0 || words.faults.length > 0 || words.label !== '';
+    if (hasWords) this.takeBlock();
+    else if (words.comments.length > 0 && !this.isDone) this.tellComments();
+    if (!this.isDone && words.end - words.start > this.longestBlock) this.tellLong();
+  }
+
+  private takeBlock(): void {
+    const { words, run } = this;
     this.blocks++;
-    if (this.isDone) return;
+    if (this.isDone) return this.tellTextAfter();
     if (words.skippable) {
-      this.firstSkippable ??= { line: this.linesRead };
+      this.firstSkippable ??= run.machine.place({
+        bytes: [words.skipAt - words.start, words.skipAt - words.start + 1],
+      });
       if (this.options.skips) return;
     }
-    parseBlock(words, this.block, this.table);
+    parseBlock(words, this.block, run.dialect);
+    if (words.count > 0 || words.faults.length > 0) this.isEmpty = false;
+    if (this.block.others.length > 0) this.resolveOthers();
     if (words.faults.length > 0) this.tellFaults();
     if (words.comments.length > 0) this.tellComments();
-    for (const { letter, tenths } of this.block.others) {
-      const what = letter + String(tenths / 10);
-      run.tell.problem({
-        problem: 'not-modelled',
-        place: run.machine.place({ code: what }),
-        facts: { what },
-      });
-    }
     if (!words.isVoid) carryOut(run);
     run.tell.block();
     if (run.endedBy !== '') this.isDone = true;
   }
 
+  /** A declared code whose conditions do not hold here keeps its built-in meaning. */
+  private resolveOthers(): void {
+    const { run, block, builtIn } = this;
+    const others = block.others.splice(0);
+    for (const other of others) {
+      const { letter, tenths, word } = other;
+      if (findDeclared(run, codeName(letter, tenths))) block.others.push(other);
+      else {
+        const group = (letter === 'G' ? builtIn.g : builtIn.m)[tenths] ?? -1;
+        if (group >= 0) addCode(block, group, tenths, word, run.dialect.isStrict);
+        else {
+          block.others.push(other);
+          carryOutUnknown(run, other);
+        }
+      }
+    }
+  }
+
+  /** The opening sign may follow comments; any later one ends the program. */
   private takePercent(): void {
     if (this.isDone) return;
-    if (!this.percentSeen && this.blocks === 0) this.percentSeen = true;
-    else {
-      endProgram(this.run, '%');
-      this.isDone = true;
+    const { run } = this;
+    if (!this.isFramed && this.blocks === 0) {
+      this.isFramed = true;
+      return;
     }
+    if (!this.isFramed && run.dialect.isStrict)
+      tellProblem(
+        run,
+        'unreadable-block',
+        { bytes: this.percentBytes() },
+        { reason: 'percent', what: '%' },
+      );
+    endProgram(run, '%');
+    this.isDone = true;
+  }
+
+  private percentBytes(): readonly [number, number] {
+    const from = this.words.percentAt - this.words.start;
+    return [from, from + 1];
+  }
+
+  private tellLong(): void {
+    const { words, run } = this;
+    const length = words.end - words.start;
+    tellProblem(
+      run,
+      'long-block',
+      { letters: 'none' },
+      { length, limit: this.longestBlock, by: length },
+    );
+  }
+
+  private tellTextAfter(): void {
+    if (this.isTextAfterTold || this.run.callsMade) return;
+    this.isTextAfterTold = true;
+    tellProblem(this.run, 'text-after-end', undefined, {});
   }
 
   private tellFaults(): void {
     const { words, run } = this;
-    for (const { problem, from, to, facts } of words.faults) {
+    for (const { problem, from, to, facts, voids } of words.faults) {
       const bytes = [from - words.start, to - words.start] as const;
-      run.tell.problem({ problem, place: run.machine.place({ bytes }), facts });
+      // A last line that breaks off where a word should go on is a file that was cut.
+      const isCut = !words.ended && voids && to >= words.end && problem === 'unreadable-block';
+      if (isCut) tellProblem(run, 'cut-short', { bytes }, { ...facts, reason: 'last-block' });
+      else tellProblem(run, problem, { bytes }, facts);
     }
   }
 
@@ -151,61 +209,16 @@ export class Walk implements LineReader {
     const { words, run } = this;
     if (!run.tell.wantsComments) return;
     for (const { from, to } of words.comments) {
-      const text = words.text(from, to);
-      const message = /^\s*msg\s*,/i.test(text);
+      const text = words.decode(from, to);
+      const message = MESSAGE.exec(text);
       run.tell.comment({
-        text: message ? text.slice(text.indexOf(',') + 1) : text,
-        message,
+        text: message ? text.slice(message[0].length) : text,
+        message: message !== null,
         place: run.machine.place({ bytes: [from - words.start, to - words.start] }),
       });
     }
   }
 }
 
-function codeTable(shop: Shop): CodeTable {
-  const { controller } = shop.setup;
-  return { g: G_GROUP_OF, m: M_GROUP_OF, isStrict: controller.switches.strict };
-}
-
-function openRun(shop: Shop, block: Block, observers: readonly Observer[]): Run {
-  const { controller, machine: description, loading, offsets } = shop.setup;
-  const machine = new Machine(block);
-  const { defaults } = controller;
-  const { travel, start } = description;
-  machine.unit = defaults.units === 'mm' ? 1 : 25.4;
-  machine.planeIndex = defaults.plane === 'xy' ? 0 : defaults.plane === 'zx' ? 1 : 2;
-  machine.isAbsolute = defaults.distance === 'absolute';
-  machine.isArcCentreAbsolute = defaults.arcCentre === 'absolute';
-  machine.feedMode = defaults.feed;
-  machine.workOffset = defaults.workOffset;
-  machine.returnTo = defaults.return;
-  machine.path = defaults.path;
-  const { startMotion } = controller.switches;
-  machine.motionCode = startMotion === 'none' ? NO_MOTION : startMotion === 'rapid' ? 0 : 10;
-  machine.x = start?.x ?? travel.x[0];
-  machine.y = start?.y ?? travel.y[0];
-  machine.z = start?.z ?? travel.z[1];
-  machine.a = 0;
-  machine.lengthOffset = 0;
-  machine.speed = 0;
-  machine.feed = NaN;
-  const run: Run = {
-    shop,
-    controller,
-    block,
-    machine,
-    tell: new Broadcaster(observers, machine),
-    offsets: new WorkOffsets(offsets),
-    cycle: emptyCycle(),
-    motion: emptyMotion(),
-    target: { x: 0.5, y: 0.5, z: 0.5, a: 0.5 },
-    circle: { u: 0.5, v: 0.5, radius: 0.5 },
-    declared: new Map(),
-    toldUnset: new Set(),
-    endedBy: '',
-    refused: false,
-  };
-  hold(run, loading.inSpindle === 'unknown' ? null : (loading.inSpindle ?? 0));
-  placeProgramZero(run);
-  return run;
-}
+/** NISTIR 6556 3.2.4: `MSG,` in any case, blanks allowed between. */
+const MESSAGE = /^[ \t]*m[ \t]*s[ \t]*g[ \t]*,/i;

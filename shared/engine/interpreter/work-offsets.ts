@@ -1,21 +1,36 @@
 import type { Offsets } from '../shop/setup';
 
+/** One number an axis; undefined where an origin has never been given. */
 export interface Origin {
   x: number | undefined;
   y: number | undefined;
   z: number | undefined;
   a: number | undefined;
 }
+export interface Shift {
+  x: number;
+  y: number;
+  z: number;
+  a: number;
+}
+export type AxisName = keyof Shift;
+export const AXES: readonly AxisName[] = ['x', 'y', 'z', 'a'];
 
-/** Work offsets in machine mm, and the two shifts that lie on top of the active one. */
+/** Origins in machine mm, and the two shifts that lie on top of the active one. */
 export class WorkOffsets {
-  private readonly origins = new Map<string, Origin>();
   /** G92: one shift over all offsets. */
-  readonly preset = { x: 0, y: 0, z: 0, a: 0 };
-  /** What G92.2 leaves behind for G92.3. */
-  readonly presetKept = { x: 0, y: 0, z: 0, a: 0 };
+  readonly preset = noShift();
+  /** What G92.2 leaves for G92.3. */
+  readonly presetKept = noShift();
+  /**
+   * Bits (1 X, 2 Y, 4 Z) of axes whose zero G92 has set: from then on program coordinates are known
+   * even if the origin below has no value, because the preset makes up for it.
+   */
+  presetAxes = 0;
+  presetAxesKept = 0;
   /** G52. */
-  readonly local = { x: 0, y: 0, z: 0, a: 0 };
+  readonly local = noShift();
+  private readonly origins = new Map<string, Origin>();
 
   constructor(offsets: Offsets) {
     for (const [name, { x, y, z, a }] of Object.entries(offsets.work))
@@ -30,4 +45,22 @@ export class WorkOffsets {
     }
     return origin;
   }
+}
+
+export const noShift = (): Shift => ({ x: 0, y: 0, z: 0, a: 0 });
+
+export function copyShift(from: Shift, to: Shift): void {
+  to.x = from.x;
+  to.y = from.y;
+  to.z = from.z;
+  to.a = from.a;
+}
+
+export const isShifted = ({ x, y, z, a }: Shift): boolean =>
+  x !== 0 || y !== 0 || z !== 0 || a !== 0;
+
+/** 'G54' … 'G59.3' for 1 … 9, as G10 counts them; undefined outside. */
+export function offsetName(number: number): string | undefined {
+  if (!Number.isInteger(number) || number < 1 || 9 < number) return undefined;
+  return number <= 6 ? `G${53 + number}` : `G59.${number - 6}`;
 }

@@ -1,4 +1,5 @@
 import type { Problem } from '../interpreter/events';
+import { decodeUtf8 } from './decode';
 
 /** Words a line may hold before it is no block at all; 26 letters and a handful of G and M words are usual. */
 export const MOST_WORDS = 200;
@@ -88,5 +89,10 @@ export class LineWords {
       text += 0x20 <= byte && byte < 0x7f ? String.fromCharCode(byte) : '?';
     }
     return text;
+  }
+
+  /** A comment's text. */
+  decode(from: number, to: number): string {
+    return decodeUtf8(this.bytes, from, to);
   }
 }

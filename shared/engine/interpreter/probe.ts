@@ -1,0 +1,27 @@
+import { codeName } from '../blocks/code-groups';
+import { moveStraight, type Target } from './motions';
+import { refuse, tellProblem, type Run } from './run';
+
+/** NISTIR 6556: a probing target lies at least this far away, mm (0.010 inch). */
+const SHORTEST_PROBE = 0.254;
+
+/** G38.2 and its kin: towards the target, perhaps not all the way; the walk goes on from the target. */
+export function probe(run: Run, code: number, target: Target, feed: number): void {
+  const { machine, motion } = run;
+  const what = codeName('G', code);
+  if (machine.compensation !== 'off' || machine.feedMode === 'inverse-time') {
+    const other = machine.compensation !== 'off' ? 'G41' : 'G93';
+    return refuse(run, 'modal-conflict', { code: what }, { reason: 'probing', what, other });
+  }
+  const distance = Math.hypot(target.x - machine.x, target.y - machine.y, target.z - machine.z);
+  if (run.dialect.isStrict && distance < SHORTEST_PROBE)
+    tellProblem(run, 'out-of-range-word', undefined, {
+      letter: what,
+      what,
+      value: distance,
+      needs: 'farther',
+    });
+  motion.endUnknown = true;
+  moveStraight(run, 'probe', 'program', target, feed);
+  motion.endUnknown = false;
+}

@@ -1,0 +1,43 @@
+import type { Machine } from './machine';
+import { placeProgramZero } from './program-zero';
+import type { Run } from './run';
+
+/** The modes that a save-state code keeps and a restore-state code brings back. */
+export type SavedState = Pick<
+  Machine,
+  | 'unit'
+  | 'planeIndex'
+  | 'isAbsolute'
+  | 'isArcCentreAbsolute'
+  | 'feedMode'
+  | 'path'
+  | 'returnTo'
+  | 'workOffset'
+  | 'speed'
+  | 'feed'
+>;
+const MOST_SAVED = 32;
+
+export function saveState(run: Run): void {
+  const { machine, saved } = run;
+  if (saved.length >= MOST_SAVED) saved.shift();
+  saved.push({
+    unit: machine.unit,
+    planeIndex: machine.planeIndex,
+    isAbsolute: machine.isAbsolute,
+    isArcCentreAbsolute: machine.isArcCentreAbsolute,
+    feedMode: machine.feedMode,
+    path: machine.path,
+    returnTo: machine.returnTo,
+    workOffset: machine.workOffset,
+    speed: machine.speed,
+    feed: machine.feed,
+  });
+}
+
+export function restoreState(run: Run): void {
+  const state = run.saved.pop();
+  if (!state) return;
+  Object.assign(run.machine, state);
+  placeProgramZero(run);
+}
