@@ -1,0 +1,66 @@
+import { pairUp, worstContact, type Meetings } from '../shop/meetings';
+import type { Shop } from '../shop/shop';
+import { bodySolids, parkedSolids, rackSolids } from '../shop/solids';
+import { contactCause, contactData, wordClearing, wordMoving, wordStanding } from './contact-words';
+import { isPlaced, movedWords } from './placing';
+import { defineRule } from './rule';
+
+/** The gantry or carriage passes over the rack lower than what stands in it. */
+export const beamMeetsRack = defineRule({
+  id: 'beam-meets-rack',
+  group: 'travel-and-clearance',
+  title: 'The gantry meets the rack',
+  severity: 'stop',
+  protects: 'The parked holders, the rack and the gantry.',
+  explanation:
+    'Bodies that ride on the gantry or the carriage keep their own height whatever Z does, so no retract clears them. They are held against the rack bodies, the fork plates and the parked holders on every motion outside a change; while it is not known which tool is in the spindle, every listed pocket counts as full.',
+  examples: {
+    setup: {
+      machine: {
+        bodies: [
+          {
+            name: 'beam',
+            rides: 'gantry',
+            box: { min: { y: 80, z: -60 }, max: { y: 240, z: 160 } },
+          },
+        ],
+      },
+    },
+    bad: 'G21 G90 G17 G54\nT1 M6\nG53 G0 Z0\nG53 G0 Y2460\nM30',
+    good: 'G21 G90 G17 G54\nT1 M6\nG53 G0 Z0\nG53 G0 Y2280\nM30',
+  },
+  word: (data, lengths) => ({
+    message: `${wordMoving(data)} runs into ${wordStanding(data)}.`,
+    advice: wordClearing(data, lengths),
+  }),
+  observe: (shop, report) => {
+    const moving = bodySolids(shop.setup.machine, true).filter((solid) => solid.rides !== 'head');
+    if (moving.length === 0) return {};
+    let held: number | null = null;
+    let meetings = pairWith(shop, held);
+    return {
+      motion(motion, state) {
+        if (motion.by === 'change') return;
+        if (state.held.number !== held) {
+          held = state.held.number;
+          meetings = pairWith(shop, held);
+        }
+        const contact = worstContact(motion, meetings, false);
+        if (!contact || !isPlaced(motion, state)) return;
+        report.found(
+          {
+            cause: contactCause(contact),
+            at: state.place(movedWords(motion)),
+            data: contactData(contact, motion, shop.setup),
+          },
+          state,
+        );
+      },
+    };
+  },
+});
+
+function pairWith(shop: Shop, held: number | null): Meetings {
+  const moving = bodySolids(shop.setup.machine, true).filter((solid) => solid.rides !== 'head');
+  return pairUp(moving, [...rackSolids(shop.setup.rack), ...parkedSolids(shop, held)]);
+}
