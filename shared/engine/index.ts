@@ -10,7 +10,7 @@ export type * from './report/report';
 export type * from './interpreter/events';
 export type { Rule, RuleExamples, RuleGroup, RuleReference, Wording } from './rules/rule';
 export type { Check, CheckOptions, ProgramName } from './check';
-export type { Trace, TraceMotion } from './trace';
+export type { Trace, TraceMotion, TraceOptions } from './trace';
 export { CODE_DEEDS, INPUT_MEANINGS } from './shop/setup';
 export { checkProgram, startCheck } from './check';
 export { startTrace } from './trace';

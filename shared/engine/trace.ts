@@ -31,13 +31,20 @@ export interface Trace {
   endOfText(): void;
 }
 
+export interface TraceOptions {
+  /** Skips blocks with a `/` in front. */
+  readonly blockDelete?: 'on' | undefined;
+  /** Called beside the trace, with the events themselves. */
+  readonly observers?: readonly Observer[] | undefined;
+}
+
 /** Walks a program for its motions alone: no rule runs. */
 export function startTrace(
   setup: Setup,
   emit: (motion: TraceMotion) => void,
-  options: { readonly blockDelete?: 'on' | undefined } = {},
+  options: TraceOptions = {},
 ): Trace {
-  const walk = new Walk(openShop(setup), [traceObserver(emit)], {
+  const walk = new Walk(openShop(setup), [traceObserver(emit), ...(options.observers ?? [])], {
     skips: options.blockDelete === 'on',
   });
   return {

@@ -189,6 +189,19 @@ function checkClaims(words: LineWords, block: Block, dialect: BlockDialect): voi
   });
 }
 
+/** NISTIR 6556 3.2 knows no comment behind a semicolon. */
+export function refuseLineComments(words: LineWords): void {
+  const comment = words.comments.find((each) => each.isLine);
+  if (!comment) return;
+  words.fault({
+    problem: 'unreadable-block',
+    from: comment.from - 1,
+    to: comment.to,
+    facts: { reason: 'semicolon', what: ';' },
+    voids: true,
+  });
+}
+
 function noteConflict(
   words: LineWords,
   word: number,

@@ -1,5 +1,5 @@
 import { Block } from '../blocks/block';
-import { addCode, parseBlock } from '../blocks/parse-block';
+import { addCode, parseBlock, refuseLineComments } from '../blocks/parse-block';
 import { codeName, groupTables } from '../blocks/code-groups';
 import { LineWords } from '../lexer/line-words';
 import { readLine } from '../lexer/read-line';
@@ -109,6 +109,7 @@ export class Walk implements LineReader {
     run.machine.line = this.linesRead;
     this.lastWritten = this.linesRead;
     if (words.percentAt >= 0) this.takePercent();
+    if (words.comments.length > 0 && run.dialect.isStrict) refuseLineComments(words);
     const hasWords = words.count > 0 || words.faults.length > 0 || words.label !== '';
     if (hasWords) this.takeBlock();
     else if (words.comments.length > 0 && !this.isDone) this.tellComments();

@@ -20,6 +20,8 @@ export interface Fault {
 export interface CommentText {
   readonly from: number;
   readonly to: number;
+  /** Whether it is opened by a semicolon and runs to the end of the line. */
+  readonly isLine: boolean;
 }
 
 /**
@@ -38,7 +40,7 @@ export class LineWords {
   readonly ends = new Int32Array(MOST_WORDS);
   /** Whether the number was written with a decimal point: 1 or 0. */
   readonly points = new Uint8Array(MOST_WORDS);
-  /** Whether the line begins with the block-delete mark. */
+  /** Whether the line begins with the block-delete mark, and where that stands. */
   skippable = false;
   skipAt = 0;
   /** Where a percent sign stands, or -1. */

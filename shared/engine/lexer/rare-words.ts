@@ -5,8 +5,13 @@ import { MOST_WORDS, type LineWords } from './line-words';
 
 const SPACE = 32;
 const TAB = 9;
-const QUOTE = 34;
 const POINT = 46;
+const LETTER_N = 13;
+
+/** Characters of a long text that a finding shows. */
+const SHOWN = 24;
+/** Words that steer the flow in macro dialects. */
+const FLOW_WORDS: readonly string[] = ['IF', 'WHILE', 'DO', 'END', 'GOTO', 'THEN', 'WEND'];
 
 const isDigit = (byte: number): boolean => 48 <= byte && byte <= 57;
 const isBlank = (byte: number): boolean => byte === SPACE || byte === TAB;
@@ -24,7 +29,7 @@ export function skipComment(line: LineWords, open: number): number {
       depth++;
     } else if (bytes[at] === 41 && --depth === 0) break;
   }
-  line.comments.push({ from: open + 1, to: at });
+  line.comments.push({ from: open + 1, to: at, isLine: false });
   if (nested >= 0)
     line.fault({
       problem: 'nested-comment',
@@ -103,7 +108,16 @@ export function readRestOfValue(line: LineWords, start: number, letter: number):
       facts: { what: line.text(start, end), byte: SPACE },
       voids: false,
     });
-  putWord(line, letter, Number(text), start, end, points);
+  const value = Number(text);
+  if (!Number.isFinite(value))
+    line.fault({
+      problem: 'unreadable-block',
+      from: start,
+      to: end,
+      facts: { reason: 'too-large', what: line.text(start, Math.min(end, start + SHOWN)) },
+      voids: true,
+    });
+  putWord(line, letter, value, start, end, points);
   return at;
 }
 
@@ -156,6 +170,8 @@ function readValueless(line: LineWords, start: number, letter: number, at: numbe
   }
   let to = at;
   if (to === start + 1) while (CLASS_OF[bytes[to]!] === LETTER) to++;
+  if (FLOW_WORDS.includes(line.text(start, Math.min(to, start + 5)).toUpperCase()))
+    return skipFlow(line, start);
   line.fault({
     problem: 'unreadable-block',
     from: start,
@@ -198,7 +214,7 @@ function skipComputed(line: LineWords, start: number, from: number): number {
     problem: 'not-modelled',
     from: start,
     to: at,
-    facts: { what: line.text(start, Math.min(at, start + 24)), reason: 'computed' },
+    facts: { what: line.text(start, Math.min(at, start + SHOWN)), reason: 'computed' },
     voids: true,
   });
   return at;
@@ -212,37 +228,65 @@ export function skipParameter(line: LineWords, from: number): number {
     problem: 'not-modelled',
     from,
     to: at,
-    facts: { what: line.text(from, Math.min(at, from + 24)), reason: 'parameter' },
+    facts: { what: line.text(from, Math.min(at, from + SHOWN)), reason: 'parameter' },
     voids: true,
   });
   return at;
 }
 
-const QUIET_LABEL = /^[0-9]+$/;
+/** Passes over the rest of a block that steers the flow. */
+function skipFlow(line: LineWords, start: number): number {
+  const { bytes } = line;
+  let at = start;
+  while (CLASS_OF[bytes[at]!] !== LINE_END && bytes[at] !== 40 && bytes[at] !== 59) at++;
+  let to = at;
+  while (isBlank(bytes[to - 1]!)) to--;
+  line.fault({
+    problem: 'not-modelled',
+    from: start,
+    to,
+    facts: { what: line.text(start, Math.min(to, start + SHOWN)), reason: 'flow' },
+    voids: true,
+  });
+  return at;
+}
 
-/** An O word names a program or, with words behind it, steers the flow. */
+/**
+ * An O word names a program or, with words behind it, steers the flow. Behind other words it is a letter O
+ * where a nought was meant.
+ */
 export function skipLabel(line: LineWords, start: number): number {
   const { bytes } = line;
   let at = start + 1;
+  if (line.count > 0 && line.letters[line.count - 1] !== LETTER_N)
+    return letterInNumber(line, start);
   while (isBlank(bytes[at]!)) at++;
   const from = at;
   if (bytes[at] === 60) while (CLASS_OF[bytes[at]!] !== LINE_END && bytes[at - 1] !== 62) at++;
-  else while (isDigit(bytes[at]!) || (at === from && CLASS_OF[bytes[at]!] === LETTER)) at++;
-  line.label = line.text(from, at);
+  else while (isDigit(bytes[at]!)) at++;
+  line.label = line.text(from, at) || line.text(start, start + 1);
   line.labelFrom = start;
   line.labelTo = at;
   while (isBlank(bytes[at]!)) at++;
-  const isNumber = QUIET_LABEL.test(line.label);
-  if (isNumber && CLASS_OF[bytes[at]!] !== LETTER) return at;
-  if (bytes[at] === QUOTE || CLASS_OF[bytes[at]!] === LETTER || !isNumber) {
-    while (CLASS_OF[bytes[at]!] !== LINE_END && bytes[at] !== 40 && bytes[at] !== 59) at++;
-    line.fault({
-      problem: 'not-modelled',
-      from: start,
-      to: at,
-      facts: { what: line.text(start, Math.min(at, start + 24)).trimEnd(), reason: 'flow' },
-      voids: true,
-    });
-  }
-  return at;
+  const isPlainNumber = isDigit(bytes[from]!) && CLASS_OF[bytes[at]!] !== LETTER;
+  return isPlainNumber && bytes[at] !== 91 ? at : skipFlow(line, start);
+}
+
+function letterInNumber(line: LineWords, start: number): number {
+  const { bytes } = line;
+  let to = start + 1;
+  while (isDigit(bytes[to]!) || bytes[to] === POINT) to++;
+  const word = line.count - 1;
+  const isJoined = line.count <= MOST_WORDS && line.ends[word] === start;
+  const from = isJoined ? line.starts[word]! : start;
+  line.fault({
+    problem: isJoined ? 'letter-for-digit' : 'unreadable-block',
+    from,
+    to,
+    facts: isJoined
+      ? { what: line.text(from, to), letter: line.text(start, start + 1) }
+      : { reason: 'text', what: line.text(from, to) },
+    voids: true,
+  });
+  return to;
 }

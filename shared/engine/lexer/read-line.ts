@@ -107,15 +107,14 @@ export function readLine(bytes: Uint8Array, at: number, line: LineWords): number
         let bits = 0;
         while (bytes[at] !== LF && bytes[at] !== CR) bits |= bytes[at++]!;
         line.bits |= bits;
-        line.comments.push({ from, to: at });
+        line.comments.push({ from, to: at, isLine: true });
         break;
       }
       case kind.SLASH:
         at = readSlash(line, at, count);
         break;
       case kind.PERCENT:
-        if (line.percentAt < 0) line.percentAt = at;
-        at++;
+        at = readPercent(line, at, count);
         break;
       case kind.COLON:
         at = readColon(line, at, count);
@@ -163,6 +162,14 @@ function readSlash(line: LineWords, at: number, count: number): number {
     voids: true,
   });
   return at + 1;
+}
+
+/** A percent sign opens or closes the program; text behind it belongs to the sign. */
+function readPercent(line: LineWords, at: number, count: number): number {
+  if (count > 0 || line.label !== '') return readOdd(line, at);
+  line.percentAt = at;
+  while (CLASS_OF[line.bytes[at]!] !== kind.LINE_END) line.bits |= line.bytes[at++]!;
+  return at;
 }
 
 /** A colon marks a main block; with digits it is how some write a program number. */
