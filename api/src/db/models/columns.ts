@@ -58,7 +58,11 @@ export function bind<T extends Model>(
   columns: Readonly<Record<string, object>>,
 ): ModelStatic<T> {
   const bound = class extends (base as unknown as ModelStatic<Model>) {};
-  bound.init(columns as never, {
+  // A copy of each: Sequelize writes the column's name into the very object it is given.
+  const own = Object.fromEntries(
+    Object.entries(columns).map(([name, column]) => [name, { ...column }]),
+  );
+  bound.init(own as never, {
     sequelize,
     tableName,
     modelName: tableName,
