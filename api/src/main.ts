@@ -37,7 +37,7 @@ async function start(config: Config): Promise<void> {
   let isStopping = false;
   const now = () => new Date();
   const passwords = await openPasswords();
-  const feed = openProgressFeed(config.databaseUrl, logger);
+  const feed = await openProgressFeed(config.databaseUrl, logger);
   const deps: Dependencies = {
     config,
     logger,

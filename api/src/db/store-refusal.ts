@@ -1,3 +1,5 @@
+import type { Revision } from '#contracts';
+
 /**
  * A store will not do what was asked, for a reason the asker can mend: the row is not there (or is
  * another shop's), another change came between, the name is taken, the value cannot be kept.
@@ -18,12 +20,17 @@ export function missing(what: string): StoreRefusal {
   return new StoreRefusal('missing', `This ${what} is not in the shop.`, { what });
 }
 
-/** `newest`: the revision number that stands now. */
-export function stale(what: string, basedOn: number, newest: number): StoreRefusal {
+/** `newest`: the revision number that stands now; `revision`: who made it and when, if there is one. */
+export function stale(
+  what: string,
+  basedOn: number,
+  newest: number,
+  revision?: Revision,
+): StoreRefusal {
   return new StoreRefusal(
     'stale',
     `The ${what} was changed by someone else: your change was based on revision ${basedOn}, the newest is ${newest}.`,
-    { what, basedOn, newest },
+    { what, basedOn, newest, revision },
   );
 }
 

@@ -1,6 +1,6 @@
-import type { WrongField } from '#contracts';
+import type { Revision, WrongField } from '#contracts';
 import type { StoreRefusal } from '../db/store-refusal';
-import { refuse, type Refusal } from './problems';
+import { changedMeanwhile, refuse, type Refusal } from './problems';
 
 /** A store's refusal as a reply says it. */
 export function refusalOfStore({ code, message, facts }: StoreRefusal): Refusal {
@@ -11,12 +11,18 @@ export function refusalOfStore({ code, message, facts }: StoreRefusal): Refusal 
         `There is no such ${String(facts['what'] ?? 'entry')} in your shop.`,
       );
     case 'stale':
-      return refuse('changed-meanwhile', message);
+      return isRevision(facts['revision'])
+        ? changedMeanwhile(`the ${String(facts['what'])}`, facts['revision'])
+        : refuse('changed-meanwhile', message);
     case 'taken':
       return refuse('already-there', message);
     case 'unfit':
       return refuse('wrong-fields', message, { fields: fieldsOf(facts['issues'], message) });
   }
+}
+
+function isRevision(value: unknown): value is Revision {
+  return typeof value === 'object' && value !== null && 'madeAt' in value;
 }
 
 function fieldsOf(issues: unknown, message: string): WrongField[] {

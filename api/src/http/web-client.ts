@@ -1,5 +1,5 @@
 import { existsSync, readFileSync } from 'node:fs';
-import { join } from 'node:path';
+import { join, posix } from 'node:path';
 import express, { Router, type RequestHandler } from 'express';
 import { refuse } from './problems';
 import { nonceOf } from './security-headers';
@@ -14,6 +14,12 @@ const NONCE_PLACEHOLDER = '__CSP_NONCE__';
  */
 export function serveWebClient(folder: string): Router {
   const router = Router();
+  const page = servePage(join(folder, 'index.html'));
+  router.use((request, response, next) => {
+    // Served as a file it would go out with its placeholder.
+    if (request.method === 'GET' && namesIndex(request.path)) page(request, response, next);
+    else next();
+  });
   router.use(
     express.static(folder, {
       index: false,
@@ -25,15 +31,21 @@ export function serveWebClient(folder: string): Router {
       },
     }),
   );
-  router.get('/{*path}', servePage(join(folder, 'index.html')));
+  router.get('/{*path}', (request, response, next) => {
+    const namesFile = /\.\w+$/.test(request.path);
+    if (namesFile || request.path.startsWith('/api/')) next();
+    else page(request, response, next);
+  });
   return router;
+}
+
+function namesIndex(path: string): boolean {
+  return posix.normalize(decodeURIComponent(path)) === '/index.html';
 }
 
 function servePage(file: string): RequestHandler {
   const page = existsSync(file) ? readFileSync(file, 'utf8') : undefined;
-  return (request, response, next) => {
-    const namesFile = /\.\w+$/.test(request.path);
-    if (namesFile || request.path.startsWith('/api/')) return next();
+  return (_request, response) => {
     if (page === undefined) {
       throw refuse('not-ready', 'The client is not built, so there is no page to show.', {
         next: 'Build it with "npm run build", or start everything with "npm start".',

@@ -11,16 +11,6 @@ import type { Stores } from '../db/database';
 import type { RevisedPart } from '../db/stores/machine-store';
 import type { Dependencies } from '../dependencies';
 import type { Author } from '../http/route';
-import { namingWhoCameBetween } from '../http/who-came-between';
-
-/** What each part is called in a sentence. */
-const SPOKEN: Record<RevisedPart, string> = {
-  description: 'the machine description',
-  rack: 'the rack',
-  loading: 'the loading',
-  offsets: 'the work offsets',
-  macro: 'the change macro',
-};
 
 export async function changeDescription(
   deps: Dependencies,
@@ -91,18 +81,14 @@ async function revise(
   { basedOn, reason }: { readonly basedOn: number; readonly reason: string },
   write: (stores: Stores) => Promise<MachineDetails>,
 ): Promise<MachineDetails> {
-  const change = () =>
-    deps.database.transaction(async (stores) => {
-      const details = await write(stores);
-      await stores.audit.add(actor.shopId, {
-        personId: actor.id,
-        action: `machine.change-${part}`,
-        subject: details.name,
-        detail: { machineId, revision: basedOn + 1, reason },
-      });
-      return details;
+  return await deps.database.transaction(async (stores) => {
+    const details = await write(stores);
+    await stores.audit.add(actor.shopId, {
+      personId: actor.id,
+      action: `machine.change-${part}`,
+      subject: details.name,
+      detail: { machineId, revision: basedOn + 1, reason },
     });
-  return await namingWhoCameBetween(SPOKEN[part], change, () =>
-    deps.database.stores.machines.revisions(actor.shopId, machineId, part),
-  );
+    return details;
+  });
 }

@@ -73,11 +73,30 @@ function schemasOf(names: Names, io: 'input' | 'output'): Record<string, Json> {
     unrepresentable: 'any',
     io,
   });
-  const components: Record<string, Json> = {};
-  for (const [id, schema] of Object.entries(schemas)) {
-    components[id] = withoutAddress(schema as Json);
-  }
-  return components;
+  return withSharedNamed(schemas, io);
+}
+
+/** Parts without a name of their own that several schemas share; the generator keeps them apart. */
+const SHARED = '__shared';
+
+function withSharedNamed(schemas: Json, io: 'input' | 'output'): Record<string, Json> {
+  const { [SHARED]: shared, ...named } = schemas as Record<string, Json>;
+  const parts = (shared?.['$defs'] ?? {}) as Record<string, Json>;
+  const nameOf = (part: string) => componentName(`Shared_${part}`, io);
+  const all = {
+    ...named,
+    ...Object.fromEntries(Object.entries(parts).map(([part, schema]) => [nameOf(part), schema])),
+  };
+  const spelt = JSON.stringify(all).replaceAll(
+    /#\/components\/schemas\/__shared#\/\$defs\/(\w+)/g,
+    (_reference, part: string) => `#/components/schemas/${nameOf(part)}`,
+  );
+  return Object.fromEntries(
+    Object.entries(JSON.parse(spelt) as Record<string, Json>).map(([id, schema]) => [
+      id,
+      withoutAddress(schema),
+    ]),
+  );
 }
 
 function componentName(name: string, io: 'input' | 'output'): string {

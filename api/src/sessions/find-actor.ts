@@ -2,7 +2,7 @@ import type { Dependencies } from '../dependencies';
 import type { Actor } from '../http/route';
 import type { ReadClaims } from './access-tokens';
 
-/** The person a verified token names, as they are now. */
+/** The person a verified token names, as they are now; a sign-out ends the access token too. */
 export async function findActor(
   deps: Dependencies,
   claims: ReadClaims,
@@ -11,6 +11,7 @@ export async function findActor(
   const person = await stores.people.find(claims.shopId, claims.personId);
   if (!person) return 'ended';
   if (!person.active) return 'inactive';
+  if (!(await stores.sessions.isAlive(claims.shopId, claims.sessionId))) return 'ended';
   return {
     id: person.id,
     shopId: claims.shopId,

@@ -3,7 +3,6 @@ import type { newToolSchema, toolChangeSchema, ToolRecord } from '#contracts';
 import type { Dependencies } from '../dependencies';
 import { refuse } from '../http/problems';
 import type { Author } from '../http/route';
-import { namingWhoCameBetween } from '../http/who-came-between';
 
 export async function addTool(
   deps: Dependencies,
@@ -29,22 +28,18 @@ export async function changeTool(
   id: string,
   change: z.output<typeof toolChangeSchema>,
 ): Promise<ToolRecord> {
-  const write = () =>
-    deps.database.transaction(async (stores) => {
-      const before = await stores.tools.find(actor.shopId, id);
-      if (before && before.tool.number !== change.tool.number) keepNumberOfLoaded(before);
-      const record = await stores.tools.change(actor.shopId, id, { ...change, madeBy: actor.id });
-      await stores.audit.add(actor.shopId, {
-        personId: actor.id,
-        action: 'tool.change',
-        subject: spelt(record),
-        detail: { toolId: id, revision: record.revision.number, reason: change.reason },
-      });
-      return record;
+  return await deps.database.transaction(async (stores) => {
+    const before = await stores.tools.find(actor.shopId, id);
+    if (before && before.tool.number !== change.tool.number) keepNumberOfLoaded(before);
+    const record = await stores.tools.change(actor.shopId, id, { ...change, madeBy: actor.id });
+    await stores.audit.add(actor.shopId, {
+      personId: actor.id,
+      action: 'tool.change',
+      subject: spelt(record),
+      detail: { toolId: id, revision: record.revision.number, reason: change.reason },
     });
-  return await namingWhoCameBetween('the tool', write, () =>
-    deps.database.stores.tools.revisions(actor.shopId, id),
-  );
+    return record;
+  });
 }
 
 function keepNumberOfLoaded({ tool, places }: ToolRecord): void {

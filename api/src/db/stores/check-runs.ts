@@ -39,7 +39,9 @@ export interface CheckRuns {
   /** Keeps how far the walk is, for a page that is opened in between. */
   keepProgress(checkId: string, linesRead: number): Promise<void>;
   /** Whether this call saved the result; false when the check was finished before. */
-  save(checkId: string, result: CheckResult): Promise<boolean>;
+  save(checkId: string, result: CheckResult, beforeCommit?: () => Promise<void>): Promise<boolean>;
+  /** A worker that was asked to stop leaves it to the next one; that was no failed attempt. */
+  giveBack(checkId: string): Promise<void>;
   /** Marks it failed, with a sentence for the person who asked. */
   fail(checkId: string, sentence: string): Promise<void>;
   /** Checks that nobody works on although they are not finished get a new job; their ids. */
@@ -66,7 +68,13 @@ export function openCheckRuns(ctx: StoreContext): CheckRuns {
         { checkId, linesRead },
       );
     },
-    save: (checkId, result) => together(ctx, (bound) => saveResult(bound, checkId, result)),
+    save: (checkId, result, beforeCommit) =>
+      together(ctx, async (bound) => {
+        const isNew = await saveResult(bound, checkId, result);
+        await beforeCommit?.();
+        return isNew;
+      }),
+    giveBack: (checkId) => together(ctx, (bound) => giveBack(bound, checkId)),
     fail: (checkId, sentence) => together(ctx, (bound) => fail(bound, checkId, sentence)),
     requeueOrphans: () => requeueOrphans(ctx),
   };
@@ -135,6 +143,16 @@ async function fail(ctx: BoundContext, checkId: string, sentence: string): Promi
     { checkId, sentence },
   );
   if (row) await announce(ctx, { ...row, checkId, state: 'failed', verdict: null });
+}
+
+async function giveBack(ctx: BoundContext, checkId: string): Promise<void> {
+  const row = await selectOne<{ cause: CheckCause }>(
+    ctx,
+    `update check_run set state = 'queued', attempts = attempts - 1, lines_read = 0
+     where id = :checkId and state = 'running' returning cause`,
+    { checkId },
+  );
+  if (row) await sendJob(ctx, checkId, row.cause);
 }
 
 async function requeueOrphans(ctx: StoreContext): Promise<string[]> {

@@ -33,7 +33,10 @@ export interface PersonRecordChange {
   readonly passwordHash?: string | undefined;
 }
 export interface PeopleStore {
-  /** Whether any person of any shop exists: until then the first one may be made without a sign-in. */
+  /**
+   * Whether any person of any shop exists: until then the first one may be made without a sign-in. Within
+   * a transaction nobody else is told "nobody yet" before it ends.
+   */
   anyone(): Promise<boolean>;
   /** Before a sign-in no shop is known: the only look-up of a person by address alone. */
   findByEmail(email: string): Promise<SignInRecord | undefined>;
@@ -57,6 +60,9 @@ export function openPeopleStore(ctx: StoreContext): PeopleStore {
   const { person } = ctx.models;
   return {
     async anyone() {
+      if (ctx.transaction) {
+        await select(ctx, `select pg_advisory_xact_lock(hashtextextended('first person', 0))`);
+      }
       return (await person.findOne({ ...inTransaction(ctx) })) !== null;
     },
     async findByEmail(email) {

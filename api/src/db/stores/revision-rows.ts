@@ -79,8 +79,9 @@ export async function nextNumber(
   basedOn: number,
 ): Promise<number> {
   const newest = await lockNewest(ctx, table, shopId, ownerId);
-  if (newest !== basedOn) throw stale(REVISES[table].what, basedOn, newest);
-  return newest + 1;
+  if (newest === basedOn) return newest + 1;
+  const revision = await newestRevision(ctx, table, shopId, ownerId);
+  throw stale(REVISES[table].what, basedOn, newest, revision && asRevision(revision));
 }
 
 /** Locks the thing and says which revision of it stands now; 0: none yet. */

@@ -24,6 +24,8 @@ export interface SessionStore {
   findByHash(tokenHash: string): Promise<RefreshToken | undefined>;
   /** Whether this call used it: false means it was used or revoked before, so somebody holds a copy. */
   markUsed(shopId: string, id: string): Promise<boolean>;
+  /** Whether a sign-in still holds: some token of its family is neither revoked nor out of date. */
+  isAlive(shopId: string, familyId: string): Promise<boolean>;
   revokeFamily(shopId: string, familyId: string): Promise<void>;
   revokeAllOf(shopId: string, personId: string): Promise<void>;
   removeExpired(before: Date): Promise<number>;
@@ -54,6 +56,15 @@ export function openSessionStore(ctx: StoreContext): SessionStore {
         { where: { shopId, id, usedAt: null, revokedAt: null }, ...inTransaction(ctx) },
       );
       return changed === 1;
+    },
+    async isAlive(shopId, familyId) {
+      // Served by refresh_token_family.
+      const row = await refreshToken.findOne({
+        where: { shopId, familyId, revokedAt: null, expiresAt: { [Op.gt]: new Date() } },
+        attributes: ['id'],
+        ...inTransaction(ctx),
+      });
+      return row !== null;
     },
     revokeFamily: (shopId, familyId) => revoke({ shopId, familyId }),
     revokeAllOf: (shopId, personId) => revoke({ shopId, personId }),
