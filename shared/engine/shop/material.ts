@@ -2,6 +2,7 @@ import type { Path } from '../geometry/path';
 import { boundsOf, cylinderPrism, meetingRegion, type Prism } from '../geometry/prism';
 import { type Span } from '../geometry/span';
 import { findBoxSpan, findSpan, isApart } from '../geometry/sweep';
+import { distanceFrom } from '../geometry/sweep-arc';
 import { LIMIT_SLACK } from '../geometry/tolerance';
 import type { Tool } from './setup';
 import type { Shop } from './shop';
@@ -58,6 +59,12 @@ export class Material {
     const region = this.regionFor(now);
     if (!region || !this.bounds || isApart(path, this.bounds)) return false;
     return findSpan(path, region, span);
+  }
+
+  /** Whether the tool is in the stock with the gauge point at this place. */
+  isMetAt(x: number, y: number, z: number, now: WorkPlace): boolean {
+    const region = this.regionFor(now);
+    return region !== undefined && distanceFrom(region, { x, y, z }) <= 0;
   }
 
   /** As isMet, for a path only known to lie in the box of its ends. */
