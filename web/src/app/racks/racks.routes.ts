@@ -1,6 +1,17 @@
 import type { Routes } from '@angular/router';
+import { openLastMachine } from '../machines/open-last-machine';
+import { unsavedGuard } from '../ui/unsaved/unsaved-guard';
 
 export const rackRoutes: Routes = [
-  { path: '', loadComponent: () => import('./rack-page').then((m) => m.RackPage) },
-  { path: ':machineId', loadComponent: () => import('./rack-page').then((m) => m.RackPage) },
+  {
+    path: '',
+    pathMatch: 'full',
+    canActivate: [openLastMachine('/racks')],
+    loadComponent: () => import('../machines/no-machine-page').then((m) => m.NoMachinePage),
+  },
+  {
+    path: ':machineId',
+    canDeactivate: [unsavedGuard],
+    loadComponent: () => import('./rack-page').then((m) => m.RackPage),
+  },
 ];

@@ -54,8 +54,10 @@ const VALUE = {
 };
 
 function type(form: FactForm, key: string, text: string): void {
-  const node: FactNode = childOf(form.root, key);
-  if (node.kind !== 'figure' && node.kind !== 'text') throw new Error(`${key} is no typed field`);
+  typeInto(childOf(form.root, key), text);
+}
+function typeInto(node: FactNode, text: string): void {
+  if (node.kind !== 'figure' && node.kind !== 'text') throw new Error('This is no typed field');
   node.control.setValue(text);
 }
 function list(form: FactForm, key: string) {
@@ -105,7 +107,7 @@ describe('a form over facts', () => {
     const steps = list(form, 'steps');
     addEntry(form, steps);
     const first = steps.entries()[0]!;
-    first.children[0]!.control.setValue('13');
+    typeInto(first.children[0]!, '13');
     copyEntry(form, steps, first);
     expect(readFactForm(form).value['steps']).toEqual([
       { length: 13 },
