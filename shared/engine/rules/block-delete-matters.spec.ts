@@ -10,7 +10,7 @@ test('flags a change that the switch decides', () => {
 G21 G90 G54
 T1 M6
 /T2 M6
-| block-delete-matters: With block delete on the program uses other tools.
+^ block-delete-matters: With block delete on the program uses other tools.
 M30
 `,
   );
@@ -27,7 +27,7 @@ G43 H1 G0 Z5
 S18000 M3
 G1 Z-1 F500
 /G1 Z-4
-| block-delete-matters: With block delete on the program reaches another depth and reaches other extents.
+^ block-delete-matters: With block delete on the program reaches another depth and reaches other extents.
 M30
 `,
   );

@@ -29,14 +29,53 @@ import { unitsMismatch } from './units-mismatch';
 import { unitsNotStated } from './units-not-stated';
 import { workOffsetNotStated } from './work-offset-not-stated';
 import { workOffsetUnset } from './work-offset-unset';
+import { changeWithoutTool } from './change-without-tool';
+import { colletGrip } from './collet-grip';
+import { cutBeforeChange } from './cut-before-change';
+import { holderFamily } from './holder-family';
+import { lifeShort } from './life-short';
+import { mustNotTurn } from './must-not-turn';
+import { notMeasured } from './not-measured';
+import { numberOrder } from './number-order';
+import { oneNumberTwoTools } from './one-number-two-tools';
+import { preselectLeftOver } from './preselect-left-over';
+import { selectedNotChanged } from './selected-not-changed';
+import { tooHeavy } from './too-heavy';
+import { tooLongForPocket } from './too-long-for-pocket';
+import { tooLongToCross } from './too-long-to-cross';
+import { tooWideForPocket } from './too-wide-for-pocket';
+import { toolByHand } from './tool-by-hand';
+import { toolCommentDisagrees } from './tool-comment-disagrees';
+import { toolInTwoPockets } from './tool-in-two-pockets';
+import { toolNotLoaded } from './tool-not-loaded';
+import { toolUnknown } from './tool-unknown';
+import { turnsWrongWay } from './turns-wrong-way';
+import { beamMeetsRack } from './beam-meets-rack';
+import { beyondTravel } from './beyond-travel';
+import { bootBelowTip } from './boot-below-tip';
+import { entersRack } from './enters-rack';
+import { entersZone } from './enters-zone';
+import { intoSpoilboard } from './into-spoilboard';
+import { nearTravel } from './near-travel';
+import { obstacle } from './obstacle';
+import { outsideSpoilboard } from './outside-spoilboard';
+import { plungeAtRapid } from './plunge-at-rapid';
+import { rapidInStock } from './rapid-in-stock';
+import { stockNotStated } from './stock-not-stated';
+import { chipLoad } from './chip-load';
 import { cutNoFeed } from './cut-no-feed';
+import { cutSpindleOff } from './cut-spindle-off';
+import { dustOrVacuumOff } from './dust-or-vacuum-off';
+import { dwellInCut } from './dwell-in-cut';
 import { feedAboveMachine } from './feed-above-machine';
+import { noSpinUp } from './no-spin-up';
 import { speedAboveSpindle } from './speed-above-spindle';
 import { speedAboveTool } from './speed-above-tool';
 import { speedBelowSpindle } from './speed-below-spindle';
 import { speedNotStated } from './speed-not-stated';
 import { spindleOnAtChange } from './spindle-on-at-change';
 import { spindleOnAtProbe } from './spindle-on-at-probe';
+import { startRepeatedOnRestore } from './start-repeated-on-restore';
 import { arcCentreMissing } from './arc-centre-missing';
 import { arcImpossible } from './arc-impossible';
 import { arcRadiusMismatch } from './arc-radius-mismatch';
@@ -82,15 +121,56 @@ export const RULES: readonly Rule[] = [
   unitsNotStated,
   workOffsetNotStated,
   workOffsetUnset,
+  // tools
+  changeWithoutTool,
+  colletGrip,
+  cutBeforeChange,
+  holderFamily,
+  lifeShort,
+  mustNotTurn,
+  notMeasured,
+  numberOrder,
+  oneNumberTwoTools,
+  preselectLeftOver,
+  selectedNotChanged,
+  tooHeavy,
+  tooLongForPocket,
+  tooLongToCross,
+  tooWideForPocket,
+  toolByHand,
+  toolCommentDisagrees,
+  toolInTwoPockets,
+  toolNotLoaded,
+  toolUnknown,
+  turnsWrongWay,
+  // travel-and-clearance
+  beamMeetsRack,
+  beyondTravel,
+  bootBelowTip,
+  entersRack,
+  entersZone,
+  intoSpoilboard,
+  nearTravel,
+  obstacle,
+  outsideSpoilboard,
+  plungeAtRapid,
+  rapidInStock,
+  stockNotStated,
   // spindle-and-feed
+  chipLoad,
   cutNoFeed,
+  cutSpindleOff,
+  dustOrVacuumOff,
+  dwellInCut,
   feedAboveMachine,
+  noSpinUp,
   speedAboveSpindle,
   speedAboveTool,
   speedBelowSpindle,
   speedNotStated,
   spindleOnAtChange,
   spindleOnAtProbe,
+  startRepeatedOnRestore,
   // arcs-and-cycles
   arcCentreMissing,
   arcImpossible,

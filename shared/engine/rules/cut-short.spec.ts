@@ -8,8 +8,8 @@ test('flags a last line that stops inside a word', () => {
     {},
     `
 G21 G90
-G0 X10 Y-
-       ^^ cut-short: The last line stops in the middle of a word.
+G0 X10 Y
+       ^ cut-short: The last line stops in the middle of a word.
 `,
   );
 });

@@ -11,7 +11,7 @@ G21 G90 G54 G17
 T2 M6
 G0 X0 Y0
 G41 D3
-    ^^ diameter-offset-other-tool: D3 is used with T2 in the spindle, whose own offset is D2.
+^^^^^^ diameter-offset-other-tool: D3 is used with T2 in the spindle, whose own offset is D2.
 G1 X20 F500
 G40 X40
 M30

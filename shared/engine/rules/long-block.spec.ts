@@ -8,7 +8,7 @@ test('flags a line longer than the controller reads', () => {
     { controller: { longestBlock: 20 } },
     `
 G0 X10 Y10 (A LONG REMARK)
-^^^^^^^^^^^^^^^^^^^^^^^^^^ long-block: The line is 26 characters long; the controller takes 20.
+| long-block: The line is 26 characters long; the controller takes 20.
 M30
 `,
   );

@@ -17,7 +17,7 @@ export const machineMoveInIncremental = defineRule({
     good: 'G21 G90 G54\nG53 G0 Z0\nM30',
   },
   word: (data) => ({
-    message: `G53 stands under G91, which this controller ${text(data, 'handling') === 'ignored' ? 'ignores, so the move is relative' : 'refuses'}.`,
+    message: `G53 stands under G91, which this controller ${text(data, 'does') === 'ignored' ? 'ignores, so the move is relative' : 'refuses'}.`,
     advice: 'Write G90 before the G53 move.',
   }),
   observe: (_shop, report) => reportProblem(report, 'machine-move-in-incremental', () => ''),

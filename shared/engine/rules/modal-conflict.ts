@@ -29,6 +29,18 @@ export const modalConflict = defineRule({
           message: `${other} and ${what} both claim the axis words of this block.`,
           advice: 'Write the two codes in blocks of their own, each with its axis words.',
         };
+      case 'compensating':
+      case 'in-cycle':
+      case 'probing':
+        return {
+          message: `${what} cannot run while ${other} is on.`,
+          advice: `Cancel ${other} before it.`,
+        };
+      case 'machine-move-motion':
+        return {
+          message: `G53 needs G0 or G1, but ${other} is in force.`,
+          advice: 'Write G0 into the G53 block.',
+        };
       case 'repeated-code':
         return {
           message: `${what} stands twice in this block.`,

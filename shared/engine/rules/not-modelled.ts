@@ -30,6 +30,12 @@ function describe(data: Parameters<typeof text>[0]): string {
       return `${what} steers the order of the blocks, which this check does not follow.`;
     case 'no-reference':
       return `${what} goes to a reference point that the machine description does not give.`;
+    case 'call':
+      return `${what} calls another program, which this check does not follow.`;
+    case 'no-axis':
+      return `${what} moves an axis that the machine description does not have.`;
+    case 'no-use':
+      return `${what} stands here, but no code of the block or in force uses it.`;
     default:
       return `${what || 'This block'} is not modelled by this check.`;
   }
@@ -40,5 +46,8 @@ function advise(reason: string): string {
     return 'Enter the stored reference point in the machine description, then check again.';
   if (reason === 'computed' || reason === 'parameter' || reason === 'flow')
     return 'Post the program with plain numbers and no jumps, or have a person prove this part.';
+  if (reason === 'call') return 'Post the program in one piece, or have a person prove this part.';
+  if (reason === 'no-axis') return 'Post for a machine without that axis, or describe the axis.';
+  if (reason === 'no-use') return 'Take the word out, or write the code it belongs to.';
   return 'Take it out if it is not needed, or declare in the controller description what it does.';
 }

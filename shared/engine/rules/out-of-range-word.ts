@@ -32,6 +32,31 @@ export const outOfRangeWord = defineRule({
           message: `${written} is no code: ${text(data, 'letter') === 'G' ? 'a G code has at most one decimal' : 'an M code is a whole number'} and neither is negative.`,
           advice: 'Write the code that is meant.',
         };
+      case 'positive':
+        return {
+          message: `${written} has to be more than zero.`,
+          advice: 'Write the value that is meant.',
+        };
+      case 'in-table':
+        return {
+          message: `${written} names an offset that the table does not hold.`,
+          advice: 'Enter the offset, or write the number that is meant.',
+        };
+      case 'pocket':
+        return {
+          message: `${written} names a pocket that the rack does not have.`,
+          advice: 'Write the number of a pocket of this rack.',
+        };
+      case 'tool':
+        return {
+          message: 'This controller refuses T0; it does not put a tool away by it.',
+          advice: 'Take the T0 change out, or put the tool away as this controller does.',
+        };
+      case 'offset-number':
+        return {
+          message: `${written} names no work offset of this controller.`,
+          advice: 'Write the number of the work offset that is meant.',
+        };
       default:
         return {
           message: `${written} is outside what ${text(data, 'letter')} allows here.`,

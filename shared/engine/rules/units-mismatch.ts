@@ -43,8 +43,9 @@ export const unitsMismatch = defineRule({
         comments.motion?.(motion, state);
         if (!isProgramMotion(motion)) return;
         unitsAt ??= state.setAt('units') ?? { line: state.line };
-        widen(spans[0]!, motion.minX, motion.maxX);
-        widen(spans[1]!, motion.minY, motion.maxY);
+        const isArc = motion.kind === 'arc';
+        widen(spans[0]!, isArc ? motion.minX : motion.toX, isArc ? motion.maxX : motion.toX);
+        widen(spans[1]!, isArc ? motion.minY : motion.toY, isArc ? motion.maxY : motion.toY);
       },
       programEnd(event, state) {
         comments.programEnd?.(event, state);

@@ -33,6 +33,14 @@ function describe(data: Parameters<typeof text>[0]): string {
       return `The line holds ${figure(data, 'words')} words; no more than ${figure(data, 'most')} are read.`;
     case 'too-long':
       return `The line is ${figure(data, 'length')} bytes long; no more than ${figure(data, 'most')} are read.`;
+    case 'too-large':
+      return `${what} is larger than any controller counts.`;
+    case 'semicolon':
+      return 'A comment stands behind a semicolon, which this controller does not know.';
+    case 'percent':
+      return 'A “%” stands alone on its line, but the program does not begin with one.';
+    case 'line-number-first':
+      return `The line number ${what} does not stand first in its block, or is none.`;
     case 'slash':
       return 'A “/” stands inside the block; block delete is only read at its beginning.';
     case 'stray-bracket':
