@@ -11,7 +11,7 @@ interface Exchange {
 
 /**
  * Streams one check until it is done or has failed. It listens before it reads the state, so that nothing
- * falls between the two, and never sends a state older than one already sent.
+ * falls between the two, and sends nothing once the check has ended.
  */
 export async function streamCheck(
   deps: Dependencies,
@@ -24,7 +24,7 @@ export async function streamCheck(
   const stream = openEventStream(request, response);
   let last: CheckProgress | undefined;
   const send = (progress: CheckProgress | undefined) => {
-    if (progress?.checkId !== checkId || (last && !isLater(progress, last))) return;
+    if (progress?.checkId !== checkId || (last && !isNews(progress, last))) return;
     last = progress;
     stream.send(progress);
     if (isFinal(progress.state)) stream.close();
@@ -84,15 +84,12 @@ async function underWay(deps: Dependencies, shopId: string): Promise<CheckProgre
     }));
 }
 
-const ORDER: Record<CheckState, number> = { queued: 0, running: 1, done: 2, failed: 2 };
-
 /**
- * Whether `next` says something after `last`. A check taken up again after a killed worker counts its
- * lines from the start: that is news too, so only an unchanged state is left out.
+ * Whether `next` says something after `last`. A check given back by a worker, or taken up again after a
+ * killed one, counts from the start: that is news too. Only the end is final.
  */
-function isLater(next: CheckProgress, last: CheckProgress): boolean {
-  if (ORDER[next.state] !== ORDER[last.state]) return ORDER[last.state] < ORDER[next.state];
-  return next.state !== last.state || next.linesRead !== last.linesRead;
+function isNews(next: CheckProgress, last: CheckProgress): boolean {
+  return !isFinal(last.state) && (next.state !== last.state || next.linesRead !== last.linesRead);
 }
 
 function isFinal(state: CheckState): boolean {
