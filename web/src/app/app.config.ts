@@ -46,7 +46,7 @@ export const appConfig: ApplicationConfig = {
     { provide: TitleStrategy, useExisting: PageTitle },
     {
       provide: MAT_FORM_FIELD_DEFAULT_OPTIONS,
-      useValue: { appearance: 'outline', subscriptSizing: 'dynamic' },
+      useValue: { appearance: 'outline', subscriptSizing: 'dynamic', hideRequiredMarker: true },
     },
     { provide: MAT_SNACK_BAR_DEFAULT_OPTIONS, useValue: { duration: 6000 } },
   ],

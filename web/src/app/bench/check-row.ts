@@ -20,6 +20,8 @@ import { countsInWords } from './counts-in-words';
 })
 export class CheckRow {
   readonly check = input.required<CheckRecord>();
+  /** Which of its names leads: on a program's own page that is the machine. */
+  readonly leads = input<'program' | 'machine'>('program');
   /** Whether to offer the check again. */
   readonly canCheckAgain = input(false);
   readonly busy = input(false);
@@ -27,6 +29,15 @@ export class CheckRow {
 
   protected readonly mark = computed(() => markOfCheck(this.check()));
   protected readonly underWay = computed(() => ['queued', 'running'].includes(this.check().state));
+  protected readonly reading = computed(() => this.check().state === 'running');
+  protected readonly name = computed(() =>
+    this.leads() === 'machine' ? this.check().machineName : this.check().programName,
+  );
+  protected readonly aside = computed(() => {
+    const { programRevision, machineName, outOfDate } = this.check();
+    if (this.leads() === 'program') return `revision ${programRevision} · ${machineName}`;
+    return outOfDate ? 'out of date: something it was held against has changed' : '';
+  });
   protected readonly percent = computed(() => percentRead(this.check()));
   protected readonly progressWords = computed(() => {
     const check = this.check();

@@ -145,7 +145,7 @@ export class ProgramPage implements HoldsUnsaved {
     this.#again.update((count) => count + 1);
   }
 
-  protected async check(machineId: string): Promise<void> {
+  protected async startCheck(machineId: string): Promise<void> {
     const program = this.program();
     if (!program) return;
     this.starting.update((ids) => new Set([...ids, machineId]));

@@ -64,9 +64,8 @@ export class ProgramTable {
       size: formatBytes(program.bytes),
       checks: withProgress(program.checks, this.byCheck()).map((check) => ({
         id: check.id,
-        machineName: check.machineName,
         mark: markOfCheck(check),
-        note: noteOf(check),
+        note: [check.machineName, noteOf(check)].filter(Boolean).join(' · '),
       })),
     })),
   );

@@ -18,8 +18,8 @@ import type { RaisableRule } from './raisable-rules';
 import { readRaisableRules } from './raisable-rules';
 import { ShopClient } from './shop-client';
 
-/** The limit is typed in MB of a million bytes, as file managers count. */
-const MB = 1_000_000;
+/** The limit is typed in binary megabytes, as the server words it: 256 MB are 268 435 456 bytes. */
+const MB = 1024 ** 2;
 
 /** The shop's name, how large a file may be, and the policy every check is held to. */
 @Component({
@@ -66,7 +66,7 @@ export class SettingsPage implements HoldsUnsaved {
     limit: new FormControl<number | null>(null, [
       Validators.required,
       Validators.min(1),
-      Validators.max(4294),
+      Validators.max(4096),
     ]),
   });
 
@@ -86,7 +86,7 @@ export class SettingsPage implements HoldsUnsaved {
         readRaisableRules(),
       ]);
       this.rules.set(rules);
-      this.shop.reset({ name: shop.name, limit: shop.uploadLimitBytes / MB });
+      this.shop.reset({ name: shop.name, limit: Number((shop.uploadLimitBytes / MB).toFixed(3)) });
       fillPolicy(this.policy, policy, this.units());
       if (!this.mayChange()) {
         this.shop.disable();

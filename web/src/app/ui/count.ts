@@ -10,9 +10,10 @@ export function counted(count: number, one: string, many = `${one}s`): string {
   return `${formatCount(count)} ${count === 1 ? one : many}`;
 }
 
-/** Bytes as a person reads them: `812 B`, `24.8 MB`. */
+/** Bytes as a person reads them, in binary steps as the upload limit is set: `812 B`, `24.8 MB`. */
 export function formatBytes(bytes: number): string {
   if (bytes < 1000) return `${bytes} B`;
-  if (bytes < 999_500) return `${Math.round(bytes / 1000)} kB`;
-  return `${(bytes / 1e6).toFixed(1).replace(/\.0$/, '')} MB`;
+  const kilo = bytes / 1024;
+  if (kilo < 999.5) return `${Math.max(1, Math.round(kilo))} kB`;
+  return `${(kilo / 1024).toFixed(1).replace(/\.0$/, '')} MB`;
 }
