@@ -1,3 +1,4 @@
+import { startCheck } from '#engine';
 import pino, { type Logger } from 'pino';
 import { openCheckQueue } from '../../api/src/db/check-queue';
 import { openDatabase } from '../../api/src/db/database';
@@ -30,6 +31,7 @@ async function start(config: Config): Promise<void> {
   const stopping = new AbortController();
   const parts = {
     runs,
+    startCheck,
     databaseUrl: url,
     logger,
     deaths: dieAt(config.dieAt),

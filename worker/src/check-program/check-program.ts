@@ -1,5 +1,5 @@
-import { canonicalJson, sha256Hex } from '#engine';
-import { reportSchema, type ReportDocument } from '#contracts';
+import { canonicalJson, sha256Hex, type startCheck } from '#engine';
+import { reportSchema, setupSchema, type ReportDocument, type ValidSetup } from '#contracts';
 import type { Logger } from 'pino';
 import { claimCheck } from '../../../api/src/db/claim-check';
 import type { CheckRuns, CheckToRun } from '../../../api/src/db/stores/check-runs';
@@ -9,6 +9,7 @@ import { EngineFault, walkProgram, type Walked } from './walk-program';
 
 export interface CheckProgramParts {
   readonly runs: CheckRuns;
+  readonly startCheck: typeof startCheck;
   readonly databaseUrl: string;
   readonly logger: Logger;
   readonly deaths: Deaths;
@@ -48,13 +49,19 @@ async function carryOut(
 ): Promise<void> {
   const { runs, logger, deaths, now } = parts;
   const { checkId } = run;
+  const setup = setupSchema.safeParse(run.setup);
+  if (!setup.success) {
+    logger.error({ checkId, err: setup.error }, 'the setup kept with the check is refused');
+    await runs.fail(checkId, SETUP_REFUSED);
+    return;
+  }
   const began = now();
   logger.info({ checkId, lines: run.program.lines }, 'the check begins');
   try {
     await deaths.reached('begun');
-    const { report, path } = await walk(parts, run, signal);
+    const { report, path } = await walk(parts, run, setup.data, signal);
     await deaths.reached('before-save');
-    const result = { report: asDocument(run, report), path };
+    const result = { report: asDocument(run, setup.data, report), path };
     const isNew = await runs.save(checkId, result, () => deaths.reached('within-save'));
     await deaths.reached('after-save');
     const milliseconds = Math.round(now() - began);
@@ -76,8 +83,9 @@ async function carryOut(
 }
 
 async function walk(
-  { runs, deaths, now }: CheckProgramParts,
+  { runs, startCheck, deaths, now }: CheckProgramParts,
   run: CheckToRun,
+  setup: ValidSetup,
   signal: AbortSignal,
 ): Promise<Walked> {
   const pass = paceProgress(
@@ -87,7 +95,8 @@ async function walk(
     },
     now,
   );
-  return await walkProgram(run, {
+  return await walkProgram(run, setup, {
+    startCheck,
     signal,
     onProgress: async (linesRead) => {
       await deaths.walked(linesRead);
@@ -97,7 +106,11 @@ async function walk(
 }
 
 /** A report that is not of the contract's shape, or about another setup, must not be kept as a verdict. */
-function asDocument({ setup, program }: CheckToRun, report: Walked['report']): ReportDocument {
+function asDocument(
+  { program }: CheckToRun,
+  setup: ValidSetup,
+  report: Walked['report'],
+): ReportDocument {
   const checked = reportSchema.safeParse(report);
   if (!checked.success) throw new EngineFault(program.lines, checked.error);
   const expected = sha256Hex(canonicalJson(setup));
@@ -105,6 +118,10 @@ function asDocument({ setup, program }: CheckToRun, report: Walked['report']): R
   const cause = new Error(`The report is about setup ${checked.data.setup.sha256}.`);
   throw new EngineFault(program.lines, cause);
 }
+
+const SETUP_REFUSED =
+  'The setup kept with this check was written by another version of Nightlatch and cannot be read any ' +
+  'more, so nothing was checked. Ask for the check again: it takes the setup as it stands now.';
 
 function sentenceOf({ line }: EngineFault): string {
   return (

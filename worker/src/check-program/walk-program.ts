@@ -1,4 +1,4 @@
-import { startCheck, type Report } from '#engine';
+import type { Report, Setup, startCheck } from '#engine';
 import type { PlanPath } from '#contracts';
 import type { CheckToRun } from '../../../api/src/db/stores/check-runs';
 import { buildPlanPath } from './plan-path';
@@ -15,6 +15,7 @@ export class EngineFault extends Error {
 }
 
 export interface WalkOptions {
+  readonly startCheck: typeof startCheck;
   /** Aborts between two chunks; the walk then rejects with the signal's reason. */
   readonly signal: AbortSignal;
   /** Called between two chunks with the lines read so far; never goes back. */
@@ -26,10 +27,14 @@ export interface Walked {
 }
 
 /** Streams the program through the engine, twice where it has blocks that may be skipped. */
-export async function walkProgram(run: CheckToRun, options: WalkOptions): Promise<Walked> {
-  const { program, setup } = run;
+export async function walkProgram(
+  run: CheckToRun,
+  setup: Setup,
+  options: WalkOptions,
+): Promise<Walked> {
+  const { program } = run;
   const plan = buildPlanPath();
-  const check = startCheck(setup, { observers: [plan.observer], digests: false });
+  const check = options.startCheck(setup, { observers: [plan.observer], digests: false });
   const guarded = <T>(step: () => T): T => {
     try {
       return step();

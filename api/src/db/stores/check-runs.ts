@@ -1,4 +1,3 @@
-import { setupSchema, type ValidSetup } from '#contracts';
 import type { CheckCause } from '../models/checks';
 import { announce } from '../progress-channel';
 import { readBytes } from '../program-text/read-text';
@@ -16,7 +15,8 @@ import { saveResult, type CheckResult } from './save-result';
 export interface CheckToRun {
   readonly checkId: string;
   readonly shopId: string;
-  readonly setup: ValidSetup;
+  /** As it was kept; whoever uses it parses it, for a later contract may refuse it. */
+  readonly setup: unknown;
   readonly program: {
     readonly name: string;
     readonly sha256: string;
@@ -117,11 +117,11 @@ async function begin(
     await fail(bound, checkId, WORKERS_ENDED);
     return undefined;
   }
-  const { shopId, name, sha256, bytes, lines, textId } = row;
+  const { shopId, name, sha256, bytes, lines, textId, setup } = row;
   return {
     checkId,
     shopId,
-    setup: setupSchema.parse(row.setup),
+    setup,
     program: { name, sha256, bytes, lines },
     text: () => readBytes(ctx, textId),
   };

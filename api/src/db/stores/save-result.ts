@@ -1,4 +1,5 @@
-import { once } from 'node:events';
+import { Readable } from 'node:stream';
+import { pipeline } from 'node:stream/promises';
 import { promisify } from 'node:util';
 import { gzip } from 'node:zlib';
 import type { ClientBase } from 'pg';
@@ -73,14 +74,11 @@ export async function copyFindings(
   const copy = connection.query(
     copyFrom(`copy finding (${FINDING_COLUMNS.join(', ')}) from stdin`),
   );
-  const copied = once(copy, 'finish');
-  let ordinal = 0;
-  for (const finding of findings) {
-    if (!copy.write(asCopyLine(checkId, ordinal, finding))) await once(copy, 'drain');
-    ordinal += 1;
-  }
-  copy.end();
-  await copied;
+  await pipeline(Readable.from(copyLines(checkId, findings)), copy);
+}
+
+function* copyLines(checkId: string, findings: ReportDocument['findings']): Generator<string> {
+  for (const [ordinal, finding] of findings.entries()) yield asCopyLine(checkId, ordinal, finding);
 }
 
 async function savePath(
