@@ -44,6 +44,27 @@ export function markWrong(form: FactForm, wrong: readonly WrongFact[]): readonly
   });
 }
 
+/**
+ * Wrong fields as the server names them: under the part that was sent (`machine.travel.x[1]`), which
+ * the form, being of that part alone, does not know.
+ */
+export function wordProblemFields(
+  form: FactForm,
+  fields: readonly { readonly path: string; readonly message: string }[],
+): readonly WrongFact[] {
+  const known = new Set(form.root.children.map((child) => child.field.key));
+  return fields.map(({ path, message }) => {
+    const steps = splitPath(path);
+    const isKnown = known.has(String(steps[0]));
+    return { path: isKnown ? steps : steps.slice(1), sentence: message };
+  });
+}
+
+function splitPath(path: string): FactPath {
+  const steps = path.split(/[.[\]]+/).filter((step) => step !== '');
+  return steps.map((step) => (/^\d+$/.test(step) ? Number(step) : step));
+}
+
 /** The path as setup files and messages write it: `machine.travel.x[1]`. */
 export function writePath(path: FactPath): string {
   return path.reduce<string>((written, step) => {
