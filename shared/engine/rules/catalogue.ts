@@ -50,6 +50,13 @@ import { toolInTwoPockets } from './tool-in-two-pockets';
 import { toolNotLoaded } from './tool-not-loaded';
 import { toolUnknown } from './tool-unknown';
 import { turnsWrongWay } from './turns-wrong-way';
+import { flutesShort } from './flutes-short';
+import { lengthOffsetCancelledLow } from './length-offset-cancelled-low';
+import { lengthOffsetDisagrees } from './length-offset-disagrees';
+import { lengthOffsetMissing } from './length-offset-missing';
+import { lengthOffsetOtherTool } from './length-offset-other-tool';
+import { lengthOffsetStale } from './length-offset-stale';
+import { reachShort } from './reach-short';
 import { beamMeetsRack } from './beam-meets-rack';
 import { beyondTravel } from './beyond-travel';
 import { bootBelowTip } from './boot-below-tip';
@@ -143,6 +150,14 @@ export const RULES: readonly Rule[] = [
   toolNotLoaded,
   toolUnknown,
   turnsWrongWay,
+  // length
+  flutesShort,
+  lengthOffsetCancelledLow,
+  lengthOffsetDisagrees,
+  lengthOffsetMissing,
+  lengthOffsetOtherTool,
+  lengthOffsetStale,
+  reachShort,
   // travel-and-clearance
   beamMeetsRack,
   beyondTravel,

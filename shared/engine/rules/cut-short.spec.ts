@@ -9,8 +9,7 @@ test('flags a last line that stops inside a word', () => {
     `
 G21 G90
 G0 X10 Y
-       ^ cut-short: The last line stops in the middle of a word.
-`,
+       ^ cut-short: The last line stops in the middle of a word.`,
   );
 });
 
@@ -34,7 +33,6 @@ test('allows a missing last line end and a missing percent mark after the end co
     `
 %
 G0 X10
-M30
-`,
+M30`,
   );
 });
