@@ -114,6 +114,18 @@ export function findExtremes(
   return out;
 }
 
+/**
+ * The least value of one coordinate that a path itself goes to: its end, or a bulge of an arc past its
+ * start; where it starts is the doing of the path before. Takes the coordinate's start, end and least.
+ */
+export function ownLeast(from: number, to: number, least: number): number {
+  return least === from && from < to ? to : least;
+}
+/** As ownLeast, for the greatest. */
+export function ownGreatest(from: number, to: number, greatest: number): number {
+  return greatest === from && to < from ? to : greatest;
+}
+
 /** Whether a turn from `start` passes `angle`, all in radians. */
 export function passesAngle(start: number, turn: number, angle: number): boolean {
   const away = turn >= 0 ? angle - start : start - angle;
@@ -156,4 +168,19 @@ function widenY(out: MutableBounds, y: number): void {
 function widenZ(out: MutableBounds, z: number): void {
   out.minZ = Math.min(out.minZ, z);
   out.maxZ = Math.max(out.maxZ, z);
+}
+
+/** The direction (of length 1) in which an arc runs at its start (0) or end (1), its rise included. */
+export function arcTangent(path: Path, part: 0 | 1, out: MutablePoint): MutablePoint {
+  const u = path.plane === 'xy' ? 'x' : path.plane === 'zx' ? 'z' : 'y';
+  const v = path.plane === 'xy' ? 'y' : path.plane === 'zx' ? 'x' : 'z';
+  const w = path.plane === 'xy' ? 'z' : path.plane === 'zx' ? 'y' : 'x';
+  const rise = { x: path.toX - path.fromX, y: path.toY - path.fromY, z: path.toZ - path.fromZ }[w];
+  const angle = startAngle(path) + path.turn * part;
+  const around = path.radius * path.turn;
+  const length = Math.sqrt(around * around + rise * rise);
+  out[u] = (-Math.sin(angle) * around) / length;
+  out[v] = (Math.cos(angle) * around) / length;
+  out[w] = rise / length;
+  return out;
 }

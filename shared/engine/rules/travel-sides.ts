@@ -1,3 +1,4 @@
+import { ownGreatest, ownLeast } from '../geometry/path';
 import type { Motion } from '../interpreter/events';
 import type { Interval, Machine } from '../shop/setup';
 import type { LengthWords } from './rule';
@@ -72,8 +73,6 @@ function visitAxis(
 ): void {
   // NaN differs from itself, so a position that is no number is looked at too.
   if (from === to && least === from && greatest === from) return;
-  const low = least === from && from < to ? to : least;
-  const high = greatest === from && to < from ? to : greatest;
-  visit({ axis, side: 'low', at: low, limit: limits[0] });
-  visit({ axis, side: 'high', at: high, limit: limits[1] });
+  visit({ axis, side: 'low', at: ownLeast(from, to, least), limit: limits[0] });
+  visit({ axis, side: 'high', at: ownGreatest(from, to, greatest), limit: limits[1] });
 }
