@@ -36,11 +36,14 @@ export function buildApp(deps: Dependencies): Express {
 
   const app = express();
   app.disable('x-powered-by');
+  // Nothing the API sends may be kept, so a hash of every reply would be for nothing.
+  app.disable('etag');
   // Without this a query of nested brackets would reach the routes as objects.
   app.set('query parser', 'simple');
   app.use(logRequests(deps.logger), ...secureHeaders({ overTls: secureCookies }));
-  app.use(compression({ filter: mayCompress }), cookieParser(), csrf.offer);
-  app.use(API_BASE, limitSignIns());
+  app.use(compression({ filter: mayCompress }), cookieParser());
+  // Not beyond the API: a file that may be kept by anyone must carry nobody's cookie.
+  app.use(API_BASE, csrf.offer, limitSignIns());
   for (const { base, routes } of tables) app.use(base || '/', mountRoutes(routes, guards));
   app.use(API_BASE, answerUnknownRoute);
   app.use(serveWebClient(webFolder), answerUnknownRoute);

@@ -1,6 +1,7 @@
 import type { Welcome } from '#contracts';
 import type { ProgressFeed } from './checks/progress-feed';
 import type { Config } from './config';
+import type { CheckQueue } from './db/check-queue';
 import type { Database } from './db/database';
 import type { Logger } from './http/request-log';
 import type { Turnstile } from './programs/turnstile';
@@ -12,6 +13,7 @@ export interface Dependencies {
   readonly config: Pick<Config, 'secureCookies' | 'webFolder'>;
   readonly logger: Logger;
   readonly database: Database;
+  readonly queue: Pick<CheckQueue, 'answers'>;
   readonly feed: ProgressFeed;
   readonly passwords: Passwords;
   readonly attempts: SignInAttempts;

@@ -42,6 +42,7 @@ async function start(config: Config): Promise<void> {
     config,
     logger,
     database,
+    queue,
     feed,
     passwords,
     attempts: countAttempts(),

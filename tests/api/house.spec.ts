@@ -43,11 +43,12 @@ test('is healthy and ready', async () => {
   });
 });
 
-test('is not ready while it stops, without its database, or before its migrations', async () => {
+test('is not ready while it stops, without its database or queue, or before its migrations', async () => {
   const { database } = house.deps;
   const cases = [
     { isStopping: () => true },
     { database: { ...database, answers: () => Promise.reject(new Error('gone')) } },
+    { queue: { answers: () => Promise.reject(new Error('gone')) } },
     { database: { ...database, pendingMigrations: () => Promise.resolve(['one']) } },
   ];
   const details = [];
@@ -59,6 +60,7 @@ test('is not ready while it stops, without its database, or before its migration
   expect(details).toEqual([
     'The server is stopping.',
     'The database does not answer.',
+    'The queue of checks does not answer.',
     '1 migrations of the database are not yet run.',
   ]);
 });
@@ -99,6 +101,7 @@ test('allows nothing inline and nothing from elsewhere, on any reply', async () 
 test('lets files with a hash in their name be kept for ever, and no others', async () => {
   const hashed = await withClient().get('/main-ABCD1234.js');
   expect(hashed.headers['cache-control']).toBe('public, max-age=31536000, immutable');
+  expect(hashed.headers['set-cookie']).toBeUndefined();
   expect((await withClient().get('/robots.txt')).headers['cache-control']).toBe('no-cache');
   expect((await withClient().get('/missing-ABCD1234.js')).status).toBe(404);
 });

@@ -8,9 +8,7 @@ import {
   revisionListSchema,
   setupSchema,
   toolListSchema,
-  toolRecordSchema,
   type MachineDetails,
-  type ToolRecord,
 } from '#contracts';
 import { addMachine, northSetup, uploadOne } from './testing/set-up-shop';
 import { openTestHouse, type SignedInClient, type TestHouse } from './testing/test-house';
@@ -29,10 +27,6 @@ beforeAll(async () => {
 afterAll(() => house.close());
 
 const newest = async () => (await lead.get(`/machines/${machine.id}`)).as(machineDetailsSchema);
-const tool = async (number: number): Promise<ToolRecord> => {
-  const { tools } = (await lead.get('/tools')).as(toolListSchema);
-  return tools.find((each) => each.tool.number === number)!;
-};
 
 test('makes a machine of a setup file with everything in it, and lists it', async () => {
   const { machines } = (await lead.get('/machines')).as(machineListSchema);
@@ -211,7 +205,8 @@ test('does not let a setup file replace tools unasked', async () => {
   expect((await lead.get('/machines')).text).not.toContain('Third router');
   const taken = await lead.post('/machines', { setup, replaceTools: true });
   expect(taken.status).toBe(201);
-  expect((await tool(setup.tools[0]!.number)).tool.maxRpm).toBe(9000);
+  const { tools } = (await lead.get('/tools')).as(toolListSchema);
+  expect(tools.find(({ tool }) => tool.number === setup.tools[0]!.number)?.tool.maxRpm).toBe(9000);
 });
 
 test('does not let an admin take tools or offsets in by way of a setup file', async () => {
@@ -227,72 +222,6 @@ test('does not let an admin take tools or offsets in by way of a setup file', as
   offsets.offsets.work['G57'] = { x: 1 };
   const refused = await admin.put(`/machines/${machine.id}/setup`, { setup: offsets });
   expect([refused.status, refused.problem.code]).toEqual([403, 'not-allowed']);
-});
-
-test('adds a tool, changes it by revision, and refuses its number twice', async () => {
-  const { tool: like } = await tool(2);
-  const added = await lead.post('/tools', { tool: { ...like, number: 40 }, lengthOffset: 80 });
-  const record = added.as(toolRecordSchema);
-  expect(record).toMatchObject({ lengthOffset: 80, diameterOffset: null, places: [] });
-  const twice = await lead.post('/tools', { tool: { ...like, number: 40 } });
-  expect([twice.status, twice.problem.code]).toEqual([409, 'already-there']);
-  const change = { basedOn: 1, reason: 'Reground', tool: { ...record.tool, name: 'Reground' } };
-  const changed = (await lead.put(`/tools/${record.id}`, change)).as(toolRecordSchema);
-  expect(changed).toMatchObject({ tool: { name: 'Reground' }, revision: { number: 2 } });
-  const late = await lead.put(`/tools/${record.id}`, change);
-  expect(late.problem.detail).toMatch(/^Some lead changed the tool on /);
-  const revisions = (await lead.get(`/tools/${record.id}/revisions`)).as(revisionListSchema);
-  expect(revisions.revisions.map(({ number }) => number)).toEqual([2, 1]);
-});
-
-test('refuses a tool whose lengths contradict each other', async () => {
-  const { tool: like } = await tool(2);
-  const answer = await lead.post('/tools', {
-    tool: { ...like, number: 41, gaugeLength: like.stickOut - 10 },
-  });
-  expect(answer.problem.fields?.[0]).toMatchObject({ path: 'tool.gaugeLength' });
-});
-
-test('keeps the number of a tool that sits in a pocket', async () => {
-  const record = (await lead.get('/tools'))
-    .as(toolListSchema)
-    .tools.find(({ places }) => 0 < places.length)!;
-  const answer = await lead.put(`/tools/${record.id}`, {
-    basedOn: record.revision.number,
-    tool: { ...record.tool, number: 90 },
-  });
-  expect([answer.status, answer.problem.code]).toEqual([409, 'not-possible-now']);
-  expect(answer.problem.detail).toContain('sits in pocket');
-});
-
-test('records a measured length, with or without the table', async () => {
-  const record = await tool(2);
-  const longer = record.tool.gaugeLength + 1.25;
-  const answer = await operator.post(`/tools/${record.id}/measurements`, {
-    gaugeLength: longer,
-    method: 'setter',
-  });
-  const measured = answer.as(toolRecordSchema);
-  expect(measured.tool).toMatchObject({ gaugeLength: longer, measured: { method: 'setter' } });
-  expect(measured.tool.stickOut).toBeCloseTo(record.tool.stickOut + 1.25, 6);
-  expect(measured.lengthOffset).toBe(longer);
-  const untouched = await operator.post(`/tools/${record.id}/measurements`, {
-    gaugeLength: longer + 1,
-    method: 'block',
-    inTable: false,
-  });
-  expect(untouched.as(toolRecordSchema).lengthOffset).toBe(longer);
-});
-
-test('refuses a measured length that the holder alone is longer than', async () => {
-  const record = await tool(2);
-  const answer = await operator.post(`/tools/${record.id}/measurements`, {
-    gaugeLength: 1,
-    method: 'setter',
-  });
-  expect(answer.status).toBe(400);
-  expect(answer.problem.detail).toContain('its holder alone is longer');
-  expect((await tool(2)).revision).toEqual(record.revision);
 });
 
 test('keeps the job sheet of a program by revision', async () => {
@@ -321,9 +250,6 @@ test('puts every change on record, with who made it', async () => {
     'machine.change-loading',
     'machine.change-offsets',
     'machine.change-macro',
-    'tool.add',
-    'tool.change',
-    'tool.measure',
     'program.upload',
     'program.change-job',
     'check.ask',

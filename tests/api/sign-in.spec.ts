@@ -127,6 +127,9 @@ test('pauses at the eleventh wrong password and says for how long, known e-mail 
     );
     expect(Number(eleventh.headers['retry-after'])).toBeGreaterThan(890);
   }
+  const lead = await house.signedIn(shopId, 'lead');
+  const { events } = (await lead.get('/audit')).as(auditTrailSchema);
+  expect(events.filter(({ action }) => action === 'session.pause')).toHaveLength(1);
 });
 
 test('lets the right password in again once the pause is over, with ten new attempts', async () => {

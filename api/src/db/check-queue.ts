@@ -35,6 +35,8 @@ export interface CheckQueue {
     within: { readonly sequelize: Sequelize; readonly transaction: Transaction },
   ): Promise<string>;
   standing(jobId: string): Promise<JobStanding>;
+  /** Resolves when the queue is there to take jobs, rejects when it is not. */
+  answers(): Promise<void>;
   /** Withdraws a job, whoever holds it; one that is gone already is no error. */
   cancel(jobId: string): Promise<void>;
   /** Takes jobs one at a time until `stop`; a handler that throws has its job tried again later. */
@@ -75,6 +77,9 @@ export async function openCheckQueue(options: CheckQueueOptions): Promise<CheckQ
       if (job?.state === 'created' || job?.state === 'retry') return { state: 'waiting' };
       if (job?.state === 'active') return { state: 'taken', since: job.startedOn };
       return { state: 'over' };
+    },
+    async answers() {
+      if (!(await boss.getQueue(QUEUE))) throw new Error(`There is no queue called ${QUEUE}.`);
     },
     async cancel(jobId) {
       await boss.cancel(QUEUE, jobId);

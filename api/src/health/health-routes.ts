@@ -49,6 +49,12 @@ async function demandReadiness(deps: Dependencies): Promise<void> {
     deps.logger.warn({ err: error }, 'the database does not answer');
     throw refuse('not-ready', 'The database does not answer.');
   }
+  try {
+    await deps.queue.answers();
+  } catch (error) {
+    deps.logger.warn({ err: error }, 'the queue does not answer');
+    throw refuse('not-ready', 'The queue of checks does not answer.');
+  }
   const pending = await deps.database.pendingMigrations();
   if (0 < pending.length) {
     throw refuse('not-ready', `${pending.length} migrations of the database are not yet run.`);

@@ -26,6 +26,7 @@ export async function signIn(deps: Dependencies, { email, password }: SignIn): P
   }
   const matches = await deps.passwords.matches(record?.passwordHash, password);
   if (!record || !matches) {
+    if (record && counted.failures === LOCK_AFTER) await notePause(deps, record);
     throw refuse('wrong-sign-in', 'No active person has this e-mail and password.');
   }
   await attempts.clear();
@@ -63,6 +64,15 @@ function countInMemory(deps: Dependencies, email: string): Attempts {
     count: () => Promise.resolve(deps.attempts.count(email, deps.now())),
     clear: () => Promise.resolve(deps.attempts.forget(email)),
   };
+}
+
+async function notePause(deps: Dependencies, { person, shopId }: SignInRecord): Promise<void> {
+  await deps.database.stores.audit.add(shopId, {
+    personId: person.id,
+    action: 'session.pause',
+    subject: person.name,
+    detail: { wrongPasswords: LOCK_AFTER, seconds: LOCK_SECONDS },
+  });
 }
 
 function paused(until: Date, now: Date): Refusal {

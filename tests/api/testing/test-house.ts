@@ -49,7 +49,7 @@ export interface SignedInClient extends Client {
 
 /** The real app on a real database of its own, listening on a free loopback port. */
 export async function openTestHouse(): Promise<TestHouse> {
-  const { database, url, drop } = await makeTestDatabase();
+  const { database, queue, url, drop } = await makeTestDatabase();
   const logger = openLog('silent');
   let ahead = 0;
   const passwords = await openPasswords();
@@ -58,6 +58,7 @@ export async function openTestHouse(): Promise<TestHouse> {
     config: { secureCookies: false, webFolder: join(tmpdir(), 'no-web-client-here') },
     logger,
     database,
+    queue,
     feed,
     passwords,
     attempts: countAttempts(),
