@@ -40,6 +40,8 @@ const READY = 480;
 /** The bar is set right once a scroll has come to rest (ms). */
 const AT_REST = 160;
 const FIRST_VIEW = 640;
+/** A digit of the line numbers (0.75rem mono), px; the thin spaces between groups take less. */
+const NUMBER_WIDTH = 6.9;
 
 /**
  * The program as a marked-up proof: quiet stretches folded to a rule, each finding below its block,
@@ -125,10 +127,10 @@ export class LineReport {
       text: (line) => this.lines.text(line),
     });
   });
-  /** Room for line numbers, in characters; ranges of folds must fit. */
+  /** Room for line numbers, px; ranges of folds must fit. */
   protected readonly gutter = computed(() => {
-    const digits = formatCount(this.lineCount()).length;
-    return digits * 2 + 1;
+    const range = 2 * formatCount(this.lineCount()).length + 1;
+    return Math.ceil(range * NUMBER_WIDTH);
   });
   protected readonly hasUnfolded = computed(() => this.#opened().length > 0);
 
@@ -240,6 +242,8 @@ export class LineReport {
   }
 
   #goTo(anchor: RowAnchor): void {
+    // The row comes into the window; the window itself must be on the screen too.
+    this.scroller().nativeElement.scrollIntoView?.({ block: 'nearest' });
     this.#anchor = anchor;
     this.#holdStill();
   }

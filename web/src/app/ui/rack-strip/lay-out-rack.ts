@@ -76,13 +76,17 @@ export interface RackToDraw {
   readonly available: number;
 }
 
+/** Marks written at one place; more would run into the next row, and the sentence has them all. */
+export const MARKS_SHOWN = 2;
 const LEAST_SLOT = 78;
 const GREATEST_SLOT = 150;
 const GREATEST_SCALE = 1.05;
 /** Room for the longest assembly with its taper, px. */
 const TALLEST = 200;
 const BADGE_ROOM = 40;
-const LABEL_ROOM = 78;
+/** Room under the labels' first baseline: place and mouth, then a line for each word. */
+const LABEL_ROOM = 46;
+const WORD_ROOM = 15;
 
 /** Lays out a rack as a person sees it who stands before it. */
 export function layOutRack(input: RackToDraw): RackDrawing {
@@ -105,7 +109,7 @@ export function layOutRack(input: RackToDraw): RackDrawing {
     slots,
     slotWidth,
     width: slotWidth * Math.max(1, places.length),
-    height: labels + LABEL_ROOM,
+    height: labels + LABEL_ROOM + WORD_ROOM * mostWords(slots),
     gaugeLine,
     labels,
     fork: {
@@ -129,6 +133,15 @@ export function orderPockets(rack: Rack): readonly Pocket[] {
     return rack.edge === 'right' ? pocket.grip.y : pocket.grip.x;
   };
   return [...rack.pockets].sort((a, b) => along(a) - along(b) || a.number - b.number);
+}
+
+function mostWords(slots: readonly RackSlot[]): number {
+  const words = slots.map(
+    (slot) =>
+      Math.min(MARKS_SHOWN, slot.marks.length) +
+      (slot.state === 'in-spindle' && slot.pocket !== null ? 1 : 0),
+  );
+  return Math.max(0, ...words);
 }
 
 const MOUTHS: Readonly<Record<'front' | 'left' | 'right', Readonly<Record<Opening, Mouth>>>> = {

@@ -126,29 +126,44 @@ export interface MarkedPath {
   readonly d: string;
   readonly x: number;
   readonly y: number;
+  /** Whether the point is the one meant, or only about where the line is along its stretch. */
+  readonly exact: boolean;
 }
 
 /**
  * The run that holds a line (the last one that begins at or before it), and the point of it to mark:
- * the one nearest to the coordinate named, else where it begins.
+ * the one nearest to the coordinate named, else as far along as the line is among the run's lines.
  */
 export function findMark(runs: readonly Run[], mark: PathMark): MarkedPath | null {
-  let held: Run | null = null;
-  for (const run of runs) {
-    if (mark.line < run.fromLine) break;
-    if (run.points.length >= 2) held = run;
-  }
+  const index = runs.findLastIndex((run) => run.fromLine <= mark.line && run.points.length >= 2);
+  const held = runs[index];
   if (!held) return null;
   const { points } = held;
+  const named = mark.axis !== undefined && mark.at !== undefined;
+  const at = named
+    ? nearestTo(points, mark.axis === 'x' ? 0 : 1, mark.at!)
+    : alongBy(points, (mark.line - held.fromLine) / linesOf(runs, index, mark.line));
+  const exact = named || (mark.line === held.fromLine && points.length === 2);
+  return { d: pathOf(points), x: points[at]!, y: points[at + 1]!, exact };
+}
+
+function nearestTo(points: readonly number[], offset: 0 | 1, wanted: number): number {
   let best = 0;
-  if (mark.axis && mark.at !== undefined) {
-    const offset = mark.axis === 'x' ? 0 : 1;
-    for (let at = 0; at + 1 < points.length; at += 2) {
-      const gap = Math.abs(points[at + offset]! - mark.at);
-      if (gap < Math.abs(points[best + offset]! - mark.at)) best = at;
-    }
+  for (let at = 0; at + 1 < points.length; at += 2) {
+    const gap = Math.abs(points[at + offset]! - wanted);
+    if (gap < Math.abs(points[best + offset]! - wanted)) best = at;
   }
-  return { d: pathOf(points), x: points[best]!, y: points[best + 1]! };
+  return best;
+}
+function alongBy(points: readonly number[], share: number): number {
+  const count = points.length / 2;
+  return 2 * Math.min(count - 1, Math.max(0, Math.round(share * (count - 1))));
+}
+/** Lines from the beginning of a run to that of the next; the last run reaches at least to `line`. */
+function linesOf(runs: readonly Run[], index: number, line: number): number {
+  const from = runs[index]!.fromLine;
+  const next = runs.slice(index + 1).find((run) => from < run.fromLine)?.fromLine ?? line;
+  return Math.max(1, next - from);
 }
 
 function boxOf(points: readonly number[]): PlanBox {

@@ -172,3 +172,26 @@ function around(boxes: readonly PlanBox[]): PlanBox {
   const top = Math.max(...boxes.map((box) => box.y + box.height));
   return { x, y, width: right - x, height: top - y };
 }
+
+/** A label at a place of the picture, px. */
+export interface PlacedLabel {
+  readonly x: number;
+  readonly y: number;
+  readonly width: number;
+}
+const LABEL_HEIGHT = 14;
+
+/** Of labels that would lie over each other the first is kept; zooming in parts them. */
+export function keepApart<Label extends PlacedLabel>(labels: readonly Label[]): readonly Label[] {
+  const kept: Label[] = [];
+  for (const label of labels) {
+    const hits = kept.some(
+      (each) =>
+        Math.abs(each.y - label.y) < LABEL_HEIGHT &&
+        each.x < label.x + label.width &&
+        label.x < each.x + each.width,
+    );
+    if (!hits) kept.push(label);
+  }
+  return kept;
+}

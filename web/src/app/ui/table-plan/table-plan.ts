@@ -18,7 +18,7 @@ import type { JobSheet, Machine, Offsets, Rack } from '#engine';
 import { wordFigure } from '../facts/measure';
 import type { PathMark, PathTool } from './draw-path';
 import { drawPath, findMark, pathBox, pathTools } from './draw-path';
-import { layOutPlan } from './lay-out-plan';
+import { keepApart, layOutPlan } from './lay-out-plan';
 
 const USUAL_WIDTH = 340;
 const TALLEST = 560;
@@ -109,30 +109,34 @@ export class TablePlan {
   );
   /** Labels keep their size while the drawing under them grows. */
   protected readonly labels = computed(() => {
-    const { k } = this.#transform();
-    const at = (x: number, y: number) => {
-      const { scale, left, top } = this.fit();
-      return `translate(${left + x * scale} ${top - y * scale}) scale(${1 / k})`;
-    };
-    const { zeros, travel } = this.plan();
+    const { travel, zeros } = this.plan();
+    const placed = [
+      ...zeros.map(({ name, x, y }) => ({ kind: 'zero' as const, name, look: '', tool: 0, x, y })),
+      ...this.tools().map((each) => ({
+        kind: 'tool' as const,
+        name: this.nameOf(each.tool),
+        look: this.lookOf(each),
+        tool: each.tool,
+        x: each.start[0],
+        y: each.start[1],
+      })),
+    ].map((label) => this.#labelAt(label));
     return {
-      zeros: zeros.map((zero) => ({ name: zero.name, at: at(zero.x, zero.y) })),
-      tools: this.tools().map((each) => ({ ...each, at: at(...each.start) })),
-      front: at(travel.x, travel.y),
+      apart: keepApart(placed),
+      front: this.#labelAt({ name: 'front', x: travel.x + travel.width / 2, y: travel.y }),
     };
   });
   protected readonly marked = computed(() => {
     const mark = this.mark();
     const found = mark && findMark(this.#runs(), mark);
     if (!mark || !found) return null;
-    const { scale, left, top } = this.fit();
-    const place = `translate(${left + found.x * scale} ${top - found.y * scale})`;
-    const isRight = left + found.x * scale > this.fit().width / 2;
+    const label = this.#labelAt({ ...found, name: mark.words });
+    const isRight = label.across > this.fit().width / 2;
     return {
       ...found,
       severity: mark.severity,
-      words: mark.words,
-      at: `${place} scale(${1 / this.#transform().k})`,
+      words: found.exact ? mark.words : `about ${mark.words}`,
+      at: label.at,
       anchor: isRight ? 'end' : 'start',
       dx: isRight ? -9 : 9,
     };
@@ -184,10 +188,45 @@ export class TablePlan {
   protected showAll(): void {
     this.#zoom?.transform(select(this.frame().nativeElement), zoomIdentity);
   }
-  protected move(event: Event, right: number, up: number): void {
+  protected moveByKey(event: KeyboardEvent): void {
+    if (event.ctrlKey || event.altKey || event.metaKey) return;
+    const acts: Readonly<Record<string, () => void>> = {
+      ArrowLeft: () => this.#move(1, 0),
+      ArrowRight: () => this.#move(-1, 0),
+      ArrowUp: () => this.#move(0, 1),
+      ArrowDown: () => this.#move(0, -1),
+      '+': () => this.zoomBy(1.5),
+      '=': () => this.zoomBy(1.5),
+      '-': () => this.zoomBy(1 / 1.5),
+      '0': () => this.showAll(),
+    };
+    const act = acts[event.key];
+    if (!act) return;
     event.preventDefault();
+    act();
+  }
+
+  /** Where a label stands on the screen, zoomed, and how wide it is about. */
+  #labelAt<Label extends { readonly name: string; readonly x: number; readonly y: number }>(
+    label: Label,
+  ) {
+    const { scale, left, top } = this.fit();
+    const { k } = this.#transform();
+    const across = left + label.x * scale;
+    const down = top - label.y * scale;
+    return {
+      ...label,
+      across,
+      at: `translate(${across} ${down}) scale(${1 / k})`,
+      x: across * k,
+      y: down * k,
+      width: 10 + 8 * label.name.length,
+    };
+  }
+
+  #move(right: number, down: number): void {
     const step = 40 / this.#transform().k;
-    this.#zoom?.translateBy(select(this.frame().nativeElement), -right * step, up * step);
+    this.#zoom?.translateBy(select(this.frame().nativeElement), right * step, down * step);
   }
 
   #listen(): void {
