@@ -42,6 +42,18 @@ M30
   );
 });
 
+test('leaves a tool that is chosen and never fetched to its own rule', () => {
+  checkRule(
+    cutBeforeChange,
+    { loading: { inSpindle: 'unknown' } },
+    `
+T1
+G1 X10 F1000
+M30
+`,
+  );
+});
+
 test('allows cutting after a change', () => {
   checkRule(
     cutBeforeChange,

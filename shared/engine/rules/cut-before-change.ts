@@ -12,7 +12,7 @@ export const cutBeforeChange = defineRule({
   hold: 'look',
   protects: 'The work from being cut with the tool that happens to be in the spindle.',
   explanation:
-    'A feed move before the first change, while the loading does not say which tool the spindle holds. Where it does, the program may count on that tool and this is silent.',
+    'A feed move before the first change, while the loading does not say which tool the spindle holds. Where it does, the program may count on that tool and this is silent. A program that names a tool but never fetches it has another fault, which has its own rule.',
   examples: {
     setup: { loading: { inSpindle: 'unknown' } },
     bad: 'G21 G90 G54\nS18000 M3\nG1 X10 F1000\nM30',
@@ -32,7 +32,7 @@ export const cutBeforeChange = defineRule({
       motion(motion, state) {
         if (isDone || !cuts(motion)) return;
         isDone = true;
-        if (state.changed) return;
+        if (state.changed || state.selectedTool !== null) return;
         const { held } = state;
         if (held.known && held.number !== 0) return;
         const data = { held: held.known ? 'nothing' : 'unknown' };

@@ -31,7 +31,7 @@ export const flutesShort = defineRule({
         if (motion.kind === 'rapid' || motion.kind === 'probe' || !isProgramMotion(motion)) return;
         const { tool } = state.held;
         if (!tool || !shankFollows(tool)) return;
-        const depth = depthUnderStock(material, motion, state, 0);
+        const depth = depthUnderStock(shop, material, motion, state, 0);
         const by = depth - tool.fluteLength;
         if (by <= LIMIT_SLACK) return;
         const { number, name, fluteLength } = tool;

@@ -20,15 +20,20 @@ M30
     );
   });
 
-  test('stays silent on a stop with nothing said near it, and on comments that are no stop', () => {
+  test('stays silent on a stop with nothing said near it, on names of operations, and on comments away from a stop', () => {
     checkRule(
       handWork,
       {},
       `
 (DOOR LEFT)
-(TOOL 1 - 10 MM END MILL)
+(TURN AT HIGH SPEED)
 G21 G90 G54
 G4 P1
+M0
+(DRILL3)
+M1
+N40 M1 (2D CONTOUR 3)
+(SETUP 2)
 M0
 M30
 `,

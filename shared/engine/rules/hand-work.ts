@@ -12,7 +12,7 @@ export const handWork = defineRule({
   hold: 'judge',
   protects: 'The work from going on without what the programmer counted on a person to do.',
   explanation:
-    'A comment or message on the block of a stop (M0, M1, M60), or alone on one of the two lines before it, is read as an instruction: turn the part, move a clamp, brush the chips. Comments elsewhere are not judged, and the words themselves are not understood.',
+    'A comment on the block of a stop (M0, M1, M60), or on one of the two lines before it, that asks for an action in words such as turn, move, clamp, change, check or clean; and any text there that the controller shows to the operator. The names of operations, which many posts print above their stops, ask for nothing and are silent. Words in other languages are not understood.',
   examples: {
     bad: 'G21 G90 G54\nM0 (TURN THE PART OVER)\nM30',
     good: 'G21 G90 G54\n(TURN THE PART OVER AFTER THIS RUN)\nG4 P1\nM30',
@@ -25,8 +25,8 @@ export const handWork = defineRule({
     let said = '';
     let saidAt: Place | undefined;
     return {
-      comment({ text: words, place }: CommentEvent) {
-        if (!/\p{L}{2}/u.test(words)) return;
+      comment({ text: words, message, place }: CommentEvent) {
+        if (!(message ? /\p{L}{2}/u : ACTION).test(words)) return;
         said = words.trim();
         saidAt = place;
       },
@@ -41,3 +41,7 @@ export const handWork = defineRule({
 
 /** A post prints the message at most this many lines above its stop. */
 const LINES_BEFORE = 2;
+
+/** What a person is asked to do at a router; whole words, so that SETUP 2 is no setting. */
+const ACTION =
+  /\b(?:turn|flip|rotate|move|shift|remove|take|put|place|load|unload|clamp|unclamp|fit|insert|change|replace|swap|check|verify|inspect|measure|clean|brush|blow|vacuum|set|mount|install|attach|screw|bolt|tighten|loosen|open|close|wait|press|confirm|adjust|reposition|operator|manual|manually|by hand)\b/i;

@@ -17,14 +17,14 @@ M30
   );
 });
 
-test('flags M6 in front of T on a macro-style controller as a matter to judge', () => {
+test('notes M6 in front of T on a macro-style controller, once', () => {
   checkRule(
     numberOrder,
     { controller: { language: 'custom-macro' } },
     `
 M6 T1
-^^^^^ number-order (hold): M6 stands in front of T1 in its block, and some macro-style controllers then change to the tool chosen before.
-T2 M6
+^^^^^ number-order (note): M6 stands in front of T1 in its block, and some macro-style controllers then change to the tool chosen before.
+M6 T2
 M30
 `,
   );

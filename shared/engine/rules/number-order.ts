@@ -8,10 +8,9 @@ export const numberOrder = defineRule({
   group: 'tools',
   title: 'The tool number comes after its change',
   severity: 'stop',
-  hold: 'judge',
   protects: 'The work from the tool chosen before the one that is meant.',
   explanation:
-    'M6 with no new choice since the last change, and a T in the very next block: the change fetches the choice before. T and M6 in one block are ordinary in either order, because the words of a block have none (NISTIR 6556, 3.2.6); only on a macro-style controller, some of which act on M6 as they read it, is M6 in front a matter to judge. A T right behind an M6 that has fetched its own choice is made ahead for the next change and silent.',
+    'M6 with no new choice since the last change, and a T in the very next block: the change fetches the choice before. T and M6 in one block are ordinary in either order, because the words of a block have none (NISTIR 6556, 3.2.6); only for a macro-style controller, some of which act on M6 as they read it, is M6 in front noted, once. A T right behind an M6 that has fetched its own choice is made ahead for the next change and silent.',
   examples: {
     bad: 'G21 G90 G54\nT1 M6\nG0 X0\nM6\nT2\nM30',
     good: 'G21 G90 G54\nM6 T1\nT2\nG0 X0\nM6\nT3\nM30',
@@ -28,12 +27,14 @@ export const numberOrder = defineRule({
     /** A change that fetched nothing new, and how many blocks ago. */
     let bareChange: Place | undefined;
     let blocksSince = 0;
+    let isNoted = false;
     return {
       problem({ problem, place, facts }, state) {
-        if (problem !== 'number-order') return;
+        if (problem !== 'number-order' || isNoted) return;
+        isNoted = true;
         const tool = typeof facts['tool'] === 'number' ? facts['tool'] : null;
         const data = { tool, sameBlock: true };
-        report.found({ cause: 'same-block', at: place, severity: 'hold', data }, state);
+        report.found({ cause: 'same-block', at: place, severity: 'note', data }, state);
       },
       toolSelected({ number }, state) {
         isChosen = true;

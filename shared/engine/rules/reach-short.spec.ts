@@ -18,6 +18,20 @@ M30
   );
 });
 
+test('says nothing while the length in force is wrong, which is a stop of its own', () => {
+  checkRule(
+    reachShort,
+    {},
+    `
+G21 G90 G54
+T1 M6
+G0 X50 Y50
+G1 Z-1 F500
+M30
+`,
+  );
+});
+
 test('allows exactly the stick-out, and depth clear of the stock', () => {
   checkRule(
     reachShort,

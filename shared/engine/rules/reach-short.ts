@@ -31,7 +31,7 @@ export const reachShort = defineRule({
         if (motion.kind === 'rapid' || motion.kind === 'probe' || !isProgramMotion(motion)) return;
         const { tool } = state.held;
         if (!tool) return;
-        const depth = depthUnderStock(material, motion, state, tool.holder.diameter / 2);
+        const depth = depthUnderStock(shop, material, motion, state, tool.holder.diameter / 2);
         const by = depth - tool.stickOut;
         if (by <= LIMIT_SLACK) return;
         const { number, name, stickOut } = tool;

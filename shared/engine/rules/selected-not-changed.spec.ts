@@ -49,6 +49,23 @@ M30
   );
 });
 
+test('allows a choice replaced by another and fetched after all later on', () => {
+  checkRule(
+    selectedNotChanged,
+    {},
+    `
+T2 M6
+T1
+G1 X10 F1000
+T2 M6
+G1 X20
+T1 M6
+G1 X30
+M30
+`,
+  );
+});
+
 test('leaves a choice made ahead and left over to its own rule', () => {
   checkRule(
     selectedNotChanged,

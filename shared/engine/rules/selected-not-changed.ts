@@ -23,9 +23,8 @@ export const selectedNotChanged = defineRule({
   observe: (_shop, report) =>
     watchSelections((left, state) => {
       if (!isForgottenChange(left)) return;
-      const { number, place } = left;
-      const { held } = state;
-      const data = { tool: number, ...(held.number !== null && { held: held.number }) };
+      const { number, place, held } = left;
+      const data = { tool: number, ...(held !== null && { held }) };
       report.found({ cause: `T${number}`, at: place, tool: number, data }, state);
     }),
 });

@@ -1,58 +1,72 @@
 import type { MachineState, Observer, Place } from '../interpreter/events';
 import { isProgramMotion } from './mode-not-stated';
 
-/** A T word that no change consumed. */
+/** A T word whose tool no later change fetches. */
 export interface LeftSelection {
   readonly number: number;
   readonly place: Place;
-  /** Whether the tool in the spindle had already cut since its change when this was chosen. */
+  /** What the spindle held when it was chosen; null where that is not known. */
+  readonly held: number | null;
+  /** Whether that tool had already cut since its change. */
   readonly cutBefore: boolean;
-  /** Whether it went on cutting after it. */
+  /** Whether the cutting went on with it. */
   readonly cutAfter: boolean;
-  /** Whether the program ended with it; otherwise another T took its place. */
+  /** Whether it is the choice in force as the program ends; otherwise another T took its place. */
   readonly atEnd: boolean;
+  /** Whether any change came before it. */
   readonly changed: boolean;
   /** The first tool the program changes to; undefined when it changes to none. */
   readonly firstTool: number | undefined;
 }
 
-/** Watches every T word, and tells of those that no later change consumes. */
+type Selection = Pick<LeftSelection, 'number' | 'place' | 'held' | 'cutBefore' | 'changed'> & {
+  cutAfter: boolean;
+};
+
+/**
+ * Watches every T word, and tells at the end of those whose tool no later change fetches. A choice
+ * that another T replaces is kept until then, because a tool chosen ahead may be chosen again later.
+ */
 export function watchSelections(
   judge: (left: LeftSelection, state: MachineState) => void,
 ): Observer {
-  let pending: { number: number; place: Place; cutBefore: boolean } | undefined;
-  let cutSinceChange = false;
-  let cutAfter = false;
+  let pending: Selection | undefined;
+  const replaced = new Map<number, Selection>();
+  let hasCut = false;
   let firstTool: number | undefined;
-  const leave = (atEnd: boolean, state: MachineState) => {
-    if (!pending) return;
-    const left = { ...pending, cutAfter, atEnd, changed: state.changed, firstTool };
-    pending = undefined;
-    if (state.held.number !== left.number) judge(left, state);
-  };
   return {
     toolSelected({ number, place }, state) {
-      if (pending && pending.number !== number) leave(false, state);
-      if (pending) return;
-      pending = { number, place, cutBefore: cutSinceChange };
-      cutAfter = false;
+      if (pending?.number === number) return;
+      if (pending && !replaced.has(pending.number)) replaced.set(pending.number, pending);
+      pending = undefined;
+      const { held, changed } = state;
+      if (held.number === number) return;
+      pending = {
+        number,
+        place,
+        held: held.number,
+        cutBefore: hasCut,
+        changed,
+        cutAfter: false,
+      };
     },
     toolChanging(event) {
       pending = undefined;
+      replaced.delete(event.written);
       firstTool ??= event.written;
-    },
-    toolChanged() {
-      cutSinceChange = false;
-      cutAfter = false;
+      hasCut = false;
     },
     motion(motion) {
-      if (cutAfter && cutSinceChange) return;
+      if (hasCut && (!pending || pending.cutAfter)) return;
       if (motion.kind === 'rapid' || !motion.moves || !isProgramMotion(motion)) return;
-      cutSinceChange = true;
-      if (pending) cutAfter = true;
+      hasCut = true;
+      if (pending) pending.cutAfter = true;
     },
     programEnd(_event, state) {
-      leave(true, state);
+      for (const left of replaced.values()) judge({ ...left, atEnd: false, firstTool }, state);
+      if (pending) judge({ ...pending, atEnd: true, firstTool }, state);
+      replaced.clear();
+      pending = undefined;
     },
   };
 }
