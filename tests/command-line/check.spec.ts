@@ -30,11 +30,14 @@ describe('check', () => {
   test('ends with 2 and names the line when the program must not run', () => {
     const { code, out } = run('check', ...story('long-worktop'));
     expect(code).toBe(2);
-    expect(out).toMatch(/^STOP {2}18:1 .*past the right-hand travel/m);
+    expect(out).toMatch(/^STOP {2}16:1 .*past the right-hand travel/m);
   });
 
   test('ends with 1 when a person must look', () => {
-    const unitless = file('unitless.nc', 'G90 G94 G17 G40 G49 G80 G54\nG53 G0 Z0\nM30\n');
+    const unitless = file(
+      'unitless.nc',
+      'G90 G94 G17 G40 G49 G80 G54\nG53 G0 Z-10\nG0 X10 Y10\nM30\n',
+    );
     const { code, out } = run('check', '--setup', NORTH, unitless);
     expect(out).toContain('HOLD');
     expect(code).toBe(1);

@@ -15,10 +15,10 @@ describe('trace', () => {
       kind: 'rapid',
       to: { x: 50, y: 46, z: 0 },
     });
-    // By hand: Z-11 with H1 = 107.25 and origin -182 is -11 + 107.25 - 182 = -85.75.
+    // By hand: Z-9 with H1 = 107.25 and origin -182 is -9 + 107.25 - 182 = -83.75.
     expect(motions.find(({ line }) => line === 14)).toMatchObject({
       kind: 'feed',
-      to: { z: -85.75 },
+      to: { z: -83.75 },
       feed: 1500,
     });
     // By hand: quarter turn from (1284.2, 6) to (1294.2, 16) about (1284.2, 16), plus the origin (30, 40).
