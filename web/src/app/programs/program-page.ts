@@ -42,6 +42,7 @@ import { CheckStarter } from './check-starter';
 import { JobForm } from './job-form';
 import type { JobDocument } from './job-sheet';
 import { MachineChoices } from './machine-choices';
+import { ProgramRack } from './program-rack';
 import { ProgramReader } from './program-reader';
 import { RevisionTable } from './revision-table';
 
@@ -64,6 +65,7 @@ const POLL = 5_000;
     MatSelect,
     Notice,
     PageHeader,
+    ProgramRack,
     RevisionTable,
     RouterLink,
   ],
@@ -114,6 +116,13 @@ export class ProgramPage implements HoldsUnsaved {
   );
   protected readonly checks = computed(() =>
     withProgress(this.program()?.checks ?? [], this.#events.byCheck()),
+  );
+  /** The finished check whose rack is drawn: the newest of the newest revision. */
+  protected readonly rackCheck = computed(
+    () =>
+      this.checks()
+        .filter((check) => check.state === 'done')
+        .toSorted((one, other) => (other.finishedAt ?? '').localeCompare(one.finishedAt ?? ''))[0],
   );
   /** Machines the newest revision was not held against yet. */
   protected readonly otherMachines = computed(() => {
