@@ -87,6 +87,8 @@ import { arcCentreMissing } from './arc-centre-missing';
 import { arcImpossible } from './arc-impossible';
 import { arcRadiusMismatch } from './arc-radius-mismatch';
 import { cycleLeftOn } from './cycle-left-on';
+import { cyclePlane } from './cycle-plane';
+import { cycleWordsMissing } from './cycle-words-missing';
 import { changeNotProven } from './change-not-proven';
 import { handWork } from './hand-work';
 import { pauseInProgram } from './pause-in-program';
@@ -191,6 +193,8 @@ export const RULES: readonly Rule[] = [
   arcImpossible,
   arcRadiusMismatch,
   cycleLeftOn,
+  cyclePlane,
+  cycleWordsMissing,
   // unattended
   changeNotProven,
   handWork,
