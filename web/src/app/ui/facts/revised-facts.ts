@@ -44,9 +44,13 @@ export interface FactChange {
   readonly basedOn: number;
   readonly reason: string;
 }
+/** What a contract says of typed facts: the facts as it reads them, or everything it refuses. */
+export type Held<T = unknown> =
+  | { readonly success: true; readonly data: T }
+  | { readonly success: false; readonly error: { readonly issues: readonly z.core.$ZodIssue[] } };
 /** How a page's facts are held against the contract, kept and fetched again. */
 export interface Keeping {
-  readonly validate: (value: Facts) => z.ZodSafeParseResult<unknown>;
+  readonly validate: (value: Facts) => Held;
   readonly keep: (change: FactChange) => Observable<Standing>;
   readonly fetch: () => Observable<Standing>;
 }
