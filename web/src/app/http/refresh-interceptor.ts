@@ -1,8 +1,9 @@
 import type { HttpInterceptorFn } from '@angular/common/http';
 import { HttpErrorResponse } from '@angular/common/http';
 import { inject } from '@angular/core';
-import { catchError, switchMap, throwError } from 'rxjs';
+import { catchError, of, switchMap, throwError } from 'rxjs';
 import { CurrentUser } from '../sign-in/current-user';
+import { ProblemError } from './problem-error';
 
 /** Requests that are themselves about signing in: a 401 there is an answer, not an ended session. */
 const OWN_ANSWER = /\/api\/v1\/(session\/refresh|welcome|first-person)$/;
@@ -21,7 +22,9 @@ export const refreshInterceptor: HttpInterceptorFn = (request, next) => {
         return throwError(() => error);
       }
       return user.refresh().pipe(
-        catchError(() => {
+        catchError((failure: unknown) => {
+          // Another page of this browser was faster: its new cookies serve this one too.
+          if (isJustRenewed(failure)) return of(undefined);
           user.sessionEnded();
           return throwError(() => error);
         }),
@@ -30,3 +33,7 @@ export const refreshInterceptor: HttpInterceptorFn = (request, next) => {
     }),
   );
 };
+
+function isJustRenewed(failure: unknown): boolean {
+  return failure instanceof ProblemError && failure.code === 'session-just-renewed';
+}
