@@ -28,7 +28,13 @@ export type DrawnRow =
       /** The whole button in words. */
       readonly label: string;
     }
-  | { readonly kind: 'finding'; readonly key: string; readonly shown: ShownFinding };
+  | {
+      readonly kind: 'finding';
+      readonly key: string;
+      readonly shown: ShownFinding;
+      /** Room it takes, px; null while it has not been measured. */
+      readonly height: number | null;
+    };
 
 export interface RowsToDraw {
   readonly stack: RowStack;
@@ -36,6 +42,7 @@ export interface RowsToDraw {
   readonly findings: readonly ShownFinding[];
   readonly underlines: ReadonlyMap<number, readonly Underline[]>;
   readonly text: (line: number) => string | undefined;
+  readonly isMeasured: (id: string) => boolean;
 }
 
 export function drawRows(input: RowsToDraw): readonly DrawnRow[] {
@@ -59,7 +66,8 @@ export function underlinesOf(
 function drawRow(input: RowsToDraw, row: Row, segment: Segment): DrawnRow {
   if (segment.kind === 'finding') {
     const shown = input.findings[segment.index]!;
-    return { kind: 'finding', key: `f${shown.id}`, shown };
+    const height = input.isMeasured(shown.id) ? row.height : null;
+    return { kind: 'finding', key: `f${shown.id}`, shown, height };
   }
   if (segment.kind === 'lines') {
     const text = input.text(row.line);

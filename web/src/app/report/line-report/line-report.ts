@@ -40,6 +40,8 @@ const READY = 480;
 /** The bar is set right once a scroll has come to rest (ms). */
 const AT_REST = 160;
 const FIRST_VIEW = 640;
+/** Room above and below a finding's card (line-report.scss), px. */
+const AROUND_CARD = 10;
 /** A digit of the line numbers (0.75rem mono), px; the thin spaces between groups take less. */
 const NUMBER_WIDTH = 6.9;
 
@@ -125,6 +127,7 @@ export class LineReport {
       findings: this.findings(),
       underlines: this.#underlines(),
       text: (line) => this.lines.text(line),
+      isMeasured: (id) => this.#heights().has(id),
     });
   });
   /** Room for line numbers, px; ranges of folds must fit. */
@@ -220,8 +223,10 @@ export class LineReport {
     this.#open(fold);
   }
 
-  protected keepHeight(id: string, height: number): void {
-    if (Math.abs((this.#heights().get(id) ?? 0) - height) < 0.5) return;
+  /** Whole pixels, or the rows below would stand between two and blur. */
+  protected keepHeight(id: string, card: number): void {
+    const height = Math.ceil(card) + AROUND_CARD;
+    if (this.#heights().get(id) === height) return;
     this.#heights.update((heights) => new Map(heights).set(id, height));
   }
 

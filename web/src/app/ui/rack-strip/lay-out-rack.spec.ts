@@ -209,6 +209,6 @@ describe('scale', () => {
         ([number, x, y, opens]) => [number, x, y, opens],
       ),
     );
-    expect(draw({ rack: many, available: 390 }).slotWidth).toBeGreaterThanOrEqual(78);
+    expect(draw({ rack: many, available: 390 }).slotWidth).toBeGreaterThanOrEqual(90);
   });
 });

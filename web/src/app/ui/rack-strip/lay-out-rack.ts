@@ -78,7 +78,8 @@ export interface RackToDraw {
 
 /** Marks written at one place; more would run into the next row, and the sentence has them all. */
 export const MARKS_SHOWN = 2;
-const LEAST_SLOT = 78;
+/** The longest words of a mark still stand side by side (px). */
+const LEAST_SLOT = 92;
 const GREATEST_SLOT = 150;
 const GREATEST_SCALE = 1.05;
 /** Room for the longest assembly with its taper, px. */
@@ -118,7 +119,7 @@ export function layOutRack(input: RackToDraw): RackDrawing {
       half,
       gap: half * 0.55,
     },
-    railInFront: slots.length > 0 && slots.every((slot) => slot.mouth === 'away'),
+    railInFront: isRailInFront(slots),
     remarks: remarksOf(loading),
   };
 }
@@ -133,6 +134,11 @@ export function orderPockets(rack: Rack): readonly Pocket[] {
     return rack.edge === 'right' ? pocket.grip.y : pocket.grip.x;
   };
   return [...rack.pockets].sort((a, b) => along(a) - along(b) || a.number - b.number);
+}
+
+function isRailInFront(slots: readonly RackSlot[]): boolean {
+  const inRack = slots.filter((slot) => slot.pocket !== null);
+  return inRack.length > 0 && inRack.every((slot) => slot.mouth === 'away');
 }
 
 function mostWords(slots: readonly RackSlot[]): number {

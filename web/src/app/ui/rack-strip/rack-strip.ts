@@ -96,7 +96,8 @@ export class RackStrip {
     event.preventDefault();
     this.choose(slot);
   }
-  protected gravest(slot: RackSlot): 'stop' | 'hold' | null {
+  protected tone(slot: RackSlot): 'stop' | 'hold' | null {
+    if (slot.state === 'not-in-rack') return 'stop';
     if (slot.marks.length === 0) return null;
     return slot.marks.some((mark) => mark.severity === 'stop') ? 'stop' : 'hold';
   }

@@ -120,11 +120,16 @@ export class TablePlan {
         x: each.start[0],
         y: each.start[1],
       })),
+      {
+        kind: 'edge' as const,
+        name: 'front',
+        look: '',
+        tool: 0,
+        x: travel.x + travel.width / 2,
+        y: travel.y,
+      },
     ].map((label) => this.#labelAt(label));
-    return {
-      apart: keepApart(placed),
-      front: this.#labelAt({ name: 'front', x: travel.x + travel.width / 2, y: travel.y }),
-    };
+    return keepApart(placed);
   });
   protected readonly marked = computed(() => {
     const mark = this.mark();
