@@ -72,7 +72,7 @@ export function fillPolicy(form: PolicyFormGroup, policy: Policy, units: Units):
 /** What is typed as a policy to store. Call it on a valid form only. */
 export function policyOf(form: PolicyFormGroup, units: Units): Policy {
   const typed = form.getRawValue();
-  const mm = (value: number | null): number => Number(toMm(value ?? 0, units).toFixed(5));
+  const mm = (value: number | null): number => Number(toMm(value ?? 0, units).toFixed(4));
   return {
     unattended: {
       allowPauses: typed.allowPauses,

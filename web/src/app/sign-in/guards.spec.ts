@@ -1,6 +1,6 @@
 import { TestBed } from '@angular/core/testing';
 import type { ActivatedRouteSnapshot, RouterStateSnapshot } from '@angular/router';
-import { UrlTree } from '@angular/router';
+import type { UrlTree } from '@angular/router';
 import type { Role } from '#contracts';
 import { aProblem, aSession } from '../testing/records';
 import { setUp, signInAs } from '../testing/set-up';

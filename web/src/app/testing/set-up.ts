@@ -3,6 +3,7 @@ import { HttpTestingController, provideHttpClientTesting } from '@angular/common
 import { provideAppInitializer } from '@angular/core';
 import type { ComponentFixture } from '@angular/core/testing';
 import { TestBed } from '@angular/core/testing';
+import { MATERIAL_ANIMATIONS } from '@angular/material/core';
 import type { Routes } from '@angular/router';
 import { provideRouter, withComponentInputBinding } from '@angular/router';
 import type { Role } from '#contracts';
@@ -39,6 +40,7 @@ export function setUp(routes: Routes = [{ path: '**', children: [] }]): HttpTest
       provideHttpClientTesting(),
       provideRouter(routes, withComponentInputBinding()),
       provideAppInitializer(() => registerIcons()),
+      { provide: MATERIAL_ANIMATIONS, useValue: { animationsDisabled: true } },
       {
         provide: OPEN_EVENTS,
         useValue: () => {
