@@ -109,9 +109,8 @@ export class ToolPage implements HoldsUnsaved {
       this.#client.list().pipe(
         map((records) => {
           const record = records.find((each) => each.id === this.toolId());
-          return record
-            ? { value: factsOf(record), revision: record.revision }
-            : (this.standing() ?? { value: NEW_TOOL, revision: null });
+          if (record) this.record.set(record);
+          return this.standing() ?? { value: NEW_TOOL, revision: null };
         }),
       ),
   };

@@ -97,8 +97,27 @@ export type FactField =
 /** Facts that belong under one heading of a page. */
 export interface FactSection {
   readonly title: string;
+  /** The part of the value whose facts these are, where a form is of several parts. */
+  readonly under?: { readonly key: string; readonly label: string };
   readonly help?: string;
   readonly fields: readonly FactField[];
+}
+
+/** The fields of a form over sections; sections under the same part are one group of it. */
+export function fieldsOf(sections: readonly FactSection[]): readonly FactField[] {
+  const parts = new Map<string, { label: string; fields: FactField[] }>();
+  const own: FactField[] = [];
+  for (const { under, fields } of sections) {
+    if (!under) {
+      own.push(...fields);
+      continue;
+    }
+    const part = parts.get(under.key) ?? { label: under.label, fields: [] };
+    part.fields.push(...fields);
+    parts.set(under.key, part);
+  }
+  const groups = [...parts].map(([key, part]): GroupField => ({ type: 'group', key, ...part }));
+  return [...own, ...groups];
 }
 
 /** Short ways to write the commonest facts. */

@@ -125,7 +125,9 @@ function readNode(node: FactNode, path: FactPath, units: Units, wrong: WrongFact
       return text === '' && node.field.optional ? node.field.absent : text;
     }
     case 'choice':
-      return node.control.value === '' ? node.field.absent : node.control.value;
+      if (node.control.value !== '') return node.control.value;
+      if (!node.field.optional) wrong.push({ path, sentence: 'Choose one.' });
+      return node.field.absent;
     case 'several':
       return [...node.control.value];
     case 'flag':

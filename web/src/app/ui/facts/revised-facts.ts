@@ -24,6 +24,7 @@ import { differencesOf, rebase } from './differences';
 import { wordDifference } from './difference-words';
 import { FactEditor } from './fact-editor';
 import type { FactSection } from './fact-field';
+import { fieldsOf } from './fact-field';
 import type { FactForm } from './fact-form';
 import { childOf, openFactForm, readFactForm } from './fact-form';
 import type { FactNode } from './fact-node';
@@ -97,7 +98,8 @@ export class RevisedFacts {
     computation: (isNew) => (isNew ? this.#open(this.standing().value) : null),
   });
   /** What the changes are based on; moves on to another's revision only when the person says so. */
-  readonly #base = linkedSignal(() => this.standing());
+  readonly #changesOn = signal<Standing | null>(null);
+  readonly #base = computed(() => this.#changesOn() ?? this.standing());
   readonly #theirs = signal<Standing | null>(null);
   protected readonly reason = signal('');
   protected readonly saving = signal(false);
@@ -136,7 +138,7 @@ export class RevisedFacts {
       clashes: clashes.map(({ path, theirs: is }) => word({ path, was: undefined, is })),
     };
   });
-  readonly #fields = computed(() => this.sections().flatMap((section) => section.fields));
+  readonly #fields = computed(() => fieldsOf(this.sections()));
 
   /** Whether leaving now would lose something typed. */
   hasUnsaved(): boolean {
@@ -146,7 +148,13 @@ export class RevisedFacts {
     if (this.hasUnsaved()) event.preventDefault();
   }
   protected nodesOf(form: FactForm, section: FactSection): readonly FactNode[] {
-    return section.fields.map((field) => childOf(form.root, field.key));
+    const group = section.under ? childOf(form.root, section.under.key) : form.root;
+    if (group.kind !== 'group') return [];
+    return section.fields.map((field) => childOf(group, field.key));
+  }
+  protected partOf(section: FactSection): unknown {
+    const { value } = this.standing();
+    return section.under ? value[section.under.key] : value;
   }
   protected extraOf(section: FactSection): SectionExtra | undefined {
     return this.extras().find((extra) => extra.nlSectionExtra() === section.title);
@@ -155,6 +163,8 @@ export class RevisedFacts {
   /** Opens the form; a page may call it, to start with something other than what stands. */
   change(value: Facts = this.standing().value): void {
     this.#forget();
+    // What stands may move on while the form is open; the changes stay based on what was read.
+    this.#changesOn.set(this.standing());
     this.form.set(this.#open(value));
   }
   protected drop(): void {
@@ -198,7 +208,7 @@ export class RevisedFacts {
     if (!form || !theirs) return;
     const { value } = rebase(this.#base().value, readFactForm(form).value, theirs.value);
     this.clashes.set(this.conflict()?.clashes ?? []);
-    this.#base.set(theirs);
+    this.#changesOn.set(theirs);
     this.#theirs.set(null);
     this.wrong.set([]);
     const next = this.#open(isFacts(value) ? value : theirs.value);
@@ -229,7 +239,7 @@ export class RevisedFacts {
     this.wrong.set([]);
     this.clashes.set([]);
     this.#theirs.set(null);
-    this.#base.set(this.standing());
+    this.#changesOn.set(null);
   }
 }
 
