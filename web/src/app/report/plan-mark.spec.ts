@@ -3,7 +3,7 @@ import { markOnPlan } from './plan-mark';
 import type { ShownFinding } from './shown-finding';
 
 function shown(data: StoredFinding['data']): ShownFinding {
-  const finding = { worstLine: 1415, data } as unknown as StoredFinding;
+  const finding = { rule: 'beyond-travel', worstLine: 1415, data } as unknown as StoredFinding;
   return { severity: 'stop', finding } as ShownFinding;
 }
 

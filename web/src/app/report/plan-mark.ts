@@ -8,11 +8,11 @@ import type { ShownFinding } from './shown-finding';
 export function markOnPlan(shown: ShownFinding, units: Units): PathMark {
   const { finding, severity } = shown;
   const line = finding.worstLine;
-  const { axis, at, by, limit } = finding.data;
+  const { axis, at, by } = finding.data;
   const base = { line, severity, words: `line ${formatCount(line)}` };
   if ((axis !== 'x' && axis !== 'y') || typeof at !== 'number') return base;
   const words =
-    typeof by === 'number' && typeof limit === 'number'
+    finding.rule === 'beyond-travel' && typeof by === 'number'
       ? `${formatLength(by, units)} past travel`
       : base.words;
   return { ...base, words, axis, at };
