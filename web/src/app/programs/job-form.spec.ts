@@ -70,13 +70,13 @@ describe('JobForm', () => {
     const { fixture, field, press, saved } = await open(OAK);
     await press(/Add an obstacle/);
     await (await field('Name')).setValue('Clamp');
-    await (await field('left (x)')).setValue('40');
-    await (await field('right (x)')).setValue('10');
+    await (await field('left (x, mm)')).setValue('40');
+    await (await field('right (x, mm)')).setValue('10');
     await press('Save as job sheet 2');
     expect(saved).toEqual([]);
     const text = (fixture.nativeElement as HTMLElement).textContent;
     expect(text).toContain('left must not lie beyond right');
-    await (await field('right (x)')).setValue('70');
+    await (await field('right (x, mm)')).setValue('70');
     await press('Save as job sheet 2');
     expect(saved[0]?.obstacles).toEqual([
       { name: 'Clamp', in: 'G54', box: { min: { x: 40 }, max: { x: 70 } } },

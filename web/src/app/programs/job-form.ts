@@ -133,15 +133,13 @@ export class JobForm {
     this.touched.set(false);
   }
 
+  /** Rows that stay are kept and refilled, so that focus and drawing are not thrown away. */
   #fill(typed: ReturnType<typeof typedJob>): void {
-    this.obstacles.clear({ emitEvent: false });
-    for (const each of typed.obstacles) {
-      this.obstacles.push(obstacleGroup(each), { emitEvent: false });
-    }
-    this.form.reset({
-      ...typed,
-      obstacles: typed.obstacles.map((o) => ({ ...o, sides: [...o.sides] })),
-    });
+    const rows = this.obstacles;
+    while (typed.obstacles.length < rows.length) rows.removeAt(-1, { emitEvent: false });
+    while (rows.length < typed.obstacles.length) rows.push(obstacleGroup(), { emitEvent: false });
+    const obstacles = typed.obstacles.map((each) => ({ ...each, sides: [...each.sides] }));
+    this.form.reset({ ...typed, obstacles });
     this.touched.set(false);
     if (!this.mayChange()) this.form.disable({ emitEvent: false });
   }

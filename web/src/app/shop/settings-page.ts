@@ -116,8 +116,8 @@ export class SettingsPage implements HoldsUnsaved {
     if (this.policy.invalid || this.saving()) return;
     const said = 'The policy is saved. Checks from now on are held to it.';
     await this.#save(this.policyProblem, said, async () => {
-      const policy = policyOf(this.policy, this.units());
-      fillPolicy(this.policy, await firstValueFrom(this.#client.setPolicy(policy)), this.units());
+      await firstValueFrom(this.#client.setPolicy(policyOf(this.policy, this.units())));
+      this.policy.markAsPristine();
     });
   }
 
