@@ -77,7 +77,15 @@ describe('percentRead', () => {
   });
 });
 
-test('what is clear needs nobody', () => {
-  const counts = { waiting: 7, stopped: 1, held: 2, clear: 9, outOfDate: 3 };
-  expect(countNeedingSomeone(counts)).toBe(6);
+describe('countNeedingSomeone', () => {
+  it('counts a check once that is stopped and out of date, and none that is clear', () => {
+    const lists = partChecks([
+      aCheck({ machineId: '1', verdict: 'stopped', outOfDate: true }),
+      aCheck({ machineId: '2', verdict: 'held' }),
+      aCheck({ machineId: '3', state: 'failed', verdict: null }),
+      aCheck({ machineId: '4', verdict: 'clear' }),
+      aCheck({ machineId: '5', state: 'running', verdict: null }),
+    ]);
+    expect(countNeedingSomeone(lists)).toBe(3);
+  });
 });

@@ -1,4 +1,4 @@
-import type { Bench, CheckProgress, CheckRecord } from '#contracts';
+import type { CheckProgress, CheckRecord } from '#contracts';
 
 /** The bench's checks, parted by what they ask of a person. Each program appears once a machine. */
 export interface BenchLists {
@@ -49,9 +49,10 @@ export function partChecks(checks: readonly CheckRecord[]): BenchLists {
   };
 }
 
-/** How many programs wait for a person: stopped, held, or checked against what no longer stands. */
-export function countNeedingSomeone(counts: Bench['counts']): number {
-  return counts.stopped + counts.held + counts.outOfDate;
+/** How many checks wait for a person; one that is stopped and out of date counts once. */
+export function countNeedingSomeone(lists: BenchLists): number {
+  const { failed, stopped, held, outOfDate } = lists;
+  return failed.length + stopped.length + held.length + outOfDate.length;
 }
 
 /** Whole per cent of lines read, 0 while the number of lines is not known. */

@@ -44,8 +44,8 @@ export class BenchStore {
     return bench && partChecks(withProgress(bench.checks, this.#events.byCheck()));
   });
   readonly needingSomeone = computed(() => {
-    const bench = this.#bench();
-    return bench ? countNeedingSomeone(bench.counts) : 0;
+    const lists = this.lists();
+    return lists ? countNeedingSomeone(lists) : 0;
   });
 
   /** Reads the bench and keeps it current for as long as the caller lives. */

@@ -1,6 +1,6 @@
 import { TestBed } from '@angular/core/testing';
 import { BenchStore } from '../bench/bench-store';
-import { aBench } from '../testing/records';
+import { EAST, aBench, aCheck } from '../testing/records';
 import { setUp, settle, signInAs } from '../testing/set-up';
 import { Navigation } from './navigation';
 
@@ -21,15 +21,18 @@ describe('Navigation', () => {
     ]);
   });
 
-  it('says on the bench’s line how many programs need someone', async () => {
+  it('says on the bench’s line how many checks need someone', async () => {
     const http = setUp();
     await signInAs(http, 'operator');
     TestBed.runInInjectionContext(() => TestBed.inject(BenchStore).follow());
-    const counts = { waiting: 5, stopped: 2, held: 1, clear: 9, outOfDate: 1 };
-    http.expectOne('/api/v1/bench').flush(aBench({ counts }));
+    const checks = [
+      aCheck({ verdict: 'stopped' }),
+      aCheck({ machineId: EAST, verdict: 'clear', outOfDate: true }),
+    ];
+    http.expectOne('/api/v1/bench').flush(aBench({ checks }));
     const fixture = TestBed.createComponent(Navigation);
     await settle(fixture);
     const badge = (fixture.nativeElement as HTMLElement).querySelector('.badge');
-    expect(badge?.textContent).toBe('4 programs need someone');
+    expect(badge?.textContent).toBe('2 checks need someone');
   });
 });

@@ -4,6 +4,7 @@ import type { AuditEvent } from '#contracts';
 const WORDS: Readonly<Record<string, string>> = {
   'session.begin': 'signed in',
   'session.end': 'signed out',
+  'session.pause': 'had sign-in paused after too many wrong passwords',
   'session.token-used-twice': 'was signed out: a sign-in was used from two places',
   'shop.create': 'set up the shop',
   'shop.change': 'changed the shop’s settings',
@@ -30,6 +31,7 @@ const WORDS: Readonly<Record<string, string>> = {
 const WHOLE = new Set([
   'session.begin',
   'session.end',
+  'session.pause',
   'session.token-used-twice',
   'shop.create',
   'shop.change',
