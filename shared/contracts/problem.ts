@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 
 /** RFC 9457 problem details. `code` is ours and stable; `next` says what the person can do. */
 export const problemSchema = z.object({

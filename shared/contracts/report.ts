@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 
 /** The report contract (`nightlatch-report`, version 1). Mirrors the engine's Report type. */
 const whole = z.number().int().min(0);

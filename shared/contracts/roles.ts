@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 
 /** The role table of the product, once: routes refuse by it and the client hides by it. */
 export const ROLES = ['operator', 'programmer', 'lead', 'admin'] as const;

@@ -7,7 +7,6 @@ import {
 } from '@angular/core';
 import { provideHttpClient, withInterceptors, withXsrfConfiguration } from '@angular/common/http';
 import { MAT_FORM_FIELD_DEFAULT_OPTIONS } from '@angular/material/form-field';
-import { MatPaginatorIntl } from '@angular/material/paginator';
 import { MAT_SNACK_BAR_DEFAULT_OPTIONS } from '@angular/material/snack-bar';
 import {
   TitleStrategy,
@@ -20,7 +19,6 @@ import { problemInterceptor } from './http/problem-interceptor';
 import { refreshInterceptor } from './http/refresh-interceptor';
 import { PageTitle } from './shell/page-title';
 import { ThemeChoice } from './shell/theme-choice';
-import { PageWords } from './ui/page-words';
 import { registerIcons } from './ui/register-icons';
 
 /**
@@ -45,7 +43,6 @@ export const appConfig: ApplicationConfig = {
       inject(ThemeChoice).apply();
       registerIcons();
     }),
-    { provide: MatPaginatorIntl, useClass: PageWords },
     { provide: TitleStrategy, useExisting: PageTitle },
     {
       provide: MAT_FORM_FIELD_DEFAULT_OPTIONS,

@@ -2,7 +2,7 @@ import type { SetupImport as SetupToImport } from '#contracts';
 import { controllerSchema, machineSchema, rackSchema } from '#contracts';
 import type { FactSection } from '../ui/facts/fact-field';
 import type { Held } from '../ui/facts/revised-facts';
-import { z } from 'zod';
+import * as z from 'zod';
 import { CONTROLLER_SECTIONS } from './controller-fields';
 import { MACHINE_SECTIONS } from './machine-fields';
 import { RACK_SECTIONS } from './rack-fields';

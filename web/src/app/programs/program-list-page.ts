@@ -14,7 +14,7 @@ import { MatButton } from '@angular/material/button';
 import { MatFormField, MatLabel, MatPrefix } from '@angular/material/form-field';
 import { MatIcon } from '@angular/material/icon';
 import { MatInput } from '@angular/material/input';
-import { MatPaginator } from '@angular/material/paginator';
+import { MatPaginator, MatPaginatorIntl } from '@angular/material/paginator';
 import type { PageEvent } from '@angular/material/paginator';
 import { MatProgressBar } from '@angular/material/progress-bar';
 import { MatOption, MatSelect } from '@angular/material/select';
@@ -40,6 +40,7 @@ import { toProblemError } from '../http/problem-error';
 import { ShopEvents } from '../http/shop-events';
 import { Notice } from '../ui/notice/notice';
 import { PageHeader } from '../ui/page-header/page-header';
+import { PageWords } from '../ui/page-words';
 import type { ListQuery } from './list-query';
 import { PAGE_SIZES, changed, listParams, readListQuery } from './list-query';
 import { MachineChoices } from './machine-choices';
@@ -74,6 +75,7 @@ const POLL = 5_000;
     ReactiveFormsModule,
     UploadPanel,
   ],
+  providers: [{ provide: MatPaginatorIntl, useClass: PageWords }],
   templateUrl: './program-list-page.html',
   styleUrl: './program-list-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

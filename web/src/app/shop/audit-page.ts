@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { takeUntilDestroyed, toObservable } from '@angular/core/rxjs-interop';
-import { MatPaginator } from '@angular/material/paginator';
+import { MatPaginator, MatPaginatorIntl } from '@angular/material/paginator';
 import type { PageEvent } from '@angular/material/paginator';
 import type { Observable } from 'rxjs';
 import { EMPTY, catchError, switchMap, tap } from 'rxjs';
@@ -8,6 +8,7 @@ import type { ProblemError } from '../http/problem-error';
 import { toProblemError } from '../http/problem-error';
 import { MomentPipe } from '../ui/moment-pipe';
 import { Notice } from '../ui/notice/notice';
+import { PageWords } from '../ui/page-words';
 import { auditLine } from './audit-words';
 import type { AuditTrail } from './shop-client';
 import { ShopClient } from './shop-client';
@@ -18,6 +19,7 @@ const PAGE_SIZES = [25, 50, 100, 500] as const;
 @Component({
   selector: 'nl-audit-page',
   imports: [MatPaginator, MomentPipe, Notice],
+  providers: [{ provide: MatPaginatorIntl, useClass: PageWords }],
   templateUrl: './audit-page.html',
   styleUrl: './audit-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

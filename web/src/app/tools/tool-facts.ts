@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import type { ToolRecord } from '#contracts';
 import { toolSchema } from '#contracts';
 import type { Held } from '../ui/facts/revised-facts';
