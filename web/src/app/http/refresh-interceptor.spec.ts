@@ -41,16 +41,30 @@ describe('refreshInterceptor', () => {
     expect(router.parseUrl(router.url).queryParams['then']).toBe('/programs?search=door');
   });
 
-  it('sends the request again when another page has just fetched the new token', async () => {
+  it('does not sign anyone out because the server is away', async () => {
+    const http = setUp();
+    await signInAs(http, 'operator');
+    const asked = firstValueFrom(TestBed.inject(HttpClient).get('/api/v1/bench'));
+    const failed = expect(asked).rejects.toMatchObject({ status: 503 });
+    http.expectOne('/api/v1/bench').flush(ended, ENDED);
+    const away = aProblem({ status: 503, code: 'not-ready' });
+    http.expectOne('/api/v1/session/refresh').flush(away, { status: 503, statusText: 'Not ready' });
+    await failed;
+    expect(TestBed.inject(CurrentUser).person()).not.toBeNull();
+  });
+
+  it('takes the session another tab has just renewed', async () => {
+    vi.useFakeTimers();
     const http = setUp();
     const asked = firstValueFrom(TestBed.inject(HttpClient).get('/api/v1/bench'));
     http.expectOne('/api/v1/bench').flush(ended, ENDED);
-    const justRenewed = aProblem({ status: 409, code: 'session-just-renewed', detail: 'Renewed.' });
-    const conflict = { status: 409, statusText: 'Conflict' };
-    http.expectOne('/api/v1/session/refresh').flush(justRenewed, conflict);
+    const twin = aProblem({ code: 'session-just-renewed' });
+    http.expectOne('/api/v1/session/refresh').flush(twin, { status: 409, statusText: 'Conflict' });
+    await vi.advanceTimersByTimeAsync(1_000);
+    vi.useRealTimers();
+    http.expectOne('/api/v1/session').flush(aSession());
     http.expectOne('/api/v1/bench').flush('bench');
     expect(await asked).toBe('bench');
-    http.verify();
   });
 
   it('does not try again when the request is refused a second time', async () => {

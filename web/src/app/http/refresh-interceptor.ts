@@ -1,12 +1,10 @@
 import type { HttpInterceptorFn } from '@angular/common/http';
 import { HttpErrorResponse } from '@angular/common/http';
 import { inject } from '@angular/core';
-import { catchError, of, switchMap, throwError } from 'rxjs';
+import { catchError, switchMap, throwError } from 'rxjs';
 import { CurrentUser } from '../sign-in/current-user';
-import { ProblemError } from './problem-error';
-
-/** Requests that are themselves about signing in: a 401 there is an answer, not an ended session. */
-const OWN_ANSWER = /\/api\/v1\/(session\/refresh|welcome|first-person)$/;
+import { NO_REFRESH } from './no-refresh';
+import { toProblemError } from './problem-error';
 
 /**
  * When the short access token has ended, fetches a new one once for all waiting requests and sends
@@ -14,17 +12,16 @@ const OWN_ANSWER = /\/api\/v1\/(session\/refresh|welcome|first-person)$/;
  */
 export const refreshInterceptor: HttpInterceptorFn = (request, next) => {
   const user = inject(CurrentUser);
-  const signingIn = request.url === '/api/v1/session' && request.method === 'POST';
-  if (signingIn || OWN_ANSWER.test(request.url)) return next(request);
+  if (request.context.get(NO_REFRESH)) return next(request);
   return next(request).pipe(
     catchError((error: unknown) => {
       if (!(error instanceof HttpErrorResponse) || error.status !== 401) {
         return throwError(() => error);
       }
       return user.refresh().pipe(
-        catchError((failure: unknown) => {
-          // Another page of this browser was faster: its new cookies serve this one too.
-          if (isJustRenewed(failure)) return of(undefined);
+        catchError((refused: unknown) => {
+          // Only a plain no ends the session; a server that is away must not sign people out.
+          if (toProblemError(refused).status !== 401) return throwError(() => refused);
           user.sessionEnded();
           return throwError(() => error);
         }),
@@ -33,7 +30,3 @@ export const refreshInterceptor: HttpInterceptorFn = (request, next) => {
     }),
   );
 };
-
-function isJustRenewed(failure: unknown): boolean {
-  return failure instanceof ProblemError && failure.code === 'session-just-renewed';
-}

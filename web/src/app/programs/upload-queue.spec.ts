@@ -1,7 +1,9 @@
+import type { HttpRequest } from '@angular/common/http';
 import { HttpEventType } from '@angular/common/http';
 import type { TestRequest } from '@angular/common/http/testing';
 import { TestBed } from '@angular/core/testing';
-import { CHECK, NORTH, PROGRAM, REVISION, aProblem } from '../testing/records';
+import { CurrentUser } from '../sign-in/current-user';
+import { CHECK, NORTH, PROGRAM, REVISION, aProblem, aSession } from '../testing/records';
 import { setUp, signInAs } from '../testing/set-up';
 import { UploadQueue } from './upload-queue';
 
@@ -77,6 +79,20 @@ describe('UploadQueue', () => {
     queue.sendAgain(queue.items()[0]?.id ?? 0);
     underWay()[0]?.flush(stored('a.nc'), { status: 201, statusText: 'Created' });
     expect(steps()).toBe('a.nc stored');
+  });
+
+  it('renews a session that is about to end before the bytes go out', async () => {
+    const http = setUp();
+    const user = TestBed.inject(CurrentUser);
+    const resumed = user.resume();
+    const soon = new Date(Date.now() + 30_000).toISOString();
+    http.expectOne('/api/v1/session').flush({ ...aSession(), expiresAt: soon });
+    await resumed;
+    TestBed.inject(UploadQueue).add([file('a.nc')], NORTH);
+    const isUpload = (request: HttpRequest<unknown>) => request.url === '/api/v1/programs';
+    expect(http.match(isUpload)).toHaveLength(0);
+    http.expectOne('/api/v1/session/refresh').flush(aSession());
+    expect(http.match(isUpload)).toHaveLength(1);
   });
 
   it('breaks off a file that is taken off the list', async () => {

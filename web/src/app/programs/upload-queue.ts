@@ -2,7 +2,7 @@ import type { HttpEvent } from '@angular/common/http';
 import { HttpClient, HttpEventType } from '@angular/common/http';
 import { DOCUMENT, Injectable, computed, inject, signal } from '@angular/core';
 import type { Observable } from 'rxjs';
-import { Subject, catchError, filter, map, mergeMap, of, takeUntil, tap } from 'rxjs';
+import { Subject, catchError, filter, map, mergeMap, of, switchMap, takeUntil, tap } from 'rxjs';
 import { uploadResultSchema } from '#contracts';
 import { toProblemError, unexpectedReply } from '../http/problem-error';
 import { CurrentUser } from '../sign-in/current-user';
@@ -74,19 +74,19 @@ export class UploadQueue {
     const form = new FormData();
     form.append('files', file, file.name);
     this.#set(id, { step: 'sending', sent: 0 });
-    return this.#http
-      .post('/api/v1/programs', form, {
-        params: { machineId: item.machineId },
-        reportProgress: true,
-        observe: 'events',
-      })
-      .pipe(
-        map((event) => stateOfEvent(event, file.size)),
-        filter((state) => state !== null),
-        catchError((error: unknown) => of(stateOfProblem(toProblemError(error)))),
-        tap((state) => this.#set(id, state)),
-        takeUntil(this.#dropped.pipe(filter((dropped) => dropped === id))),
-      );
+    const options = {
+      params: { machineId: item.machineId },
+      reportProgress: true,
+      observe: 'events' as const,
+    };
+    return this.#user.freshen().pipe(
+      switchMap(() => this.#http.post('/api/v1/programs', form, options)),
+      map((event) => stateOfEvent(event, file.size)),
+      filter((state) => state !== null),
+      catchError((error: unknown) => of(stateOfProblem(toProblemError(error)))),
+      tap((state) => this.#set(id, state)),
+      takeUntil(this.#dropped.pipe(filter((dropped) => dropped === id))),
+    );
   }
 
   #set(id: number, state: UploadState): void {

@@ -2,7 +2,17 @@ import { HttpClient } from '@angular/common/http';
 import { Injectable, computed, inject, signal } from '@angular/core';
 import { Router } from '@angular/router';
 import type { Observable } from 'rxjs';
-import { finalize, firstValueFrom, shareReplay, tap } from 'rxjs';
+import {
+  catchError,
+  finalize,
+  firstValueFrom,
+  of,
+  shareReplay,
+  switchMap,
+  tap,
+  throwError,
+  timer,
+} from 'rxjs';
 import type {
   FirstPerson,
   OwnChange,
@@ -13,7 +23,14 @@ import type {
   Units,
 } from '#contracts';
 import { may, personSchema, sessionSchema } from '#contracts';
+import { withoutRefresh } from '../http/no-refresh';
 import { parsed } from '../http/parsed';
+import { toProblemError } from '../http/problem-error';
+
+/** A session with less than this left is about to end (ms). */
+const ABOUT_TO_END = 60_000;
+/** So long after another tab renewed the session its cookies are surely here (ms). */
+const TWIN_PAUSE = 1_000;
 
 /** Who sits at this screen, what they may do and in which units they think. */
 @Injectable({ providedIn: 'root' })
@@ -45,20 +62,29 @@ export class CurrentUser {
   }
 
   signIn(body: SignIn): Observable<Session> {
-    return this.#keep(this.#http.post('/api/v1/session', body));
+    return this.#keep(this.#http.post('/api/v1/session', body, { context: withoutRefresh() }));
   }
 
   makeFirstPerson(body: FirstPerson): Observable<Session> {
-    return this.#keep(this.#http.post('/api/v1/first-person', body));
+    const context = withoutRefresh();
+    return this.#keep(this.#http.post('/api/v1/first-person', body, { context }));
   }
 
   /** A new access token; requests that ask at the same moment share one exchange. */
   refresh(): Observable<Session> {
-    this.#refreshing ??= this.#keep(this.#http.post('/api/v1/session/refresh', {})).pipe(
+    this.#refreshing ??= this.#renew().pipe(
       finalize(() => (this.#refreshing = null)),
       shareReplay(1),
     );
     return this.#refreshing;
+  }
+
+  /** Renews the session now if it is about to end: before a long upload, which is read only once. */
+  freshen(): Observable<unknown> {
+    const ends = Date.parse(this.#session()?.expiresAt ?? '');
+    if (ABOUT_TO_END < ends - Date.now()) return of(null);
+    // Whatever is wrong, the request that follows will say so in its own words.
+    return this.refresh().pipe(catchError(() => of(null)));
   }
 
   changeOwn(change: OwnChange): Observable<Person> {
@@ -89,6 +115,19 @@ export class CurrentUser {
     void this.#router.navigate(['/sign-in'], {
       queryParams: { then: this.#router.url, ended: true },
     });
+  }
+
+  #renew(): Observable<Session> {
+    const context = withoutRefresh();
+    return this.#keep(this.#http.post('/api/v1/session/refresh', {}, { context })).pipe(
+      catchError((error: unknown) => {
+        if (toProblemError(error).code !== 'session-just-renewed') return throwError(() => error);
+        // Another tab was first: its cookies are ours too, once they have arrived.
+        return timer(TWIN_PAUSE).pipe(
+          switchMap(() => this.#keep(this.#http.get('/api/v1/session', { context }))),
+        );
+      }),
+    );
   }
 
   #keep(reply: Observable<unknown>): Observable<Session> {

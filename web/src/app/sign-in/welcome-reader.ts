@@ -3,6 +3,7 @@ import { Injectable, inject } from '@angular/core';
 import type { Observable } from 'rxjs';
 import type { Welcome } from '#contracts';
 import { welcomeSchema } from '#contracts';
+import { withoutRefresh } from '../http/no-refresh';
 import { parsed } from '../http/parsed';
 
 /** What an unsigned visitor may know; reading it also hands out the anti-forgery cookie. */
@@ -11,6 +12,8 @@ export class WelcomeReader {
   readonly #http = inject(HttpClient);
 
   read(): Observable<Welcome> {
-    return this.#http.get('/api/v1/welcome').pipe(parsed(welcomeSchema));
+    return this.#http
+      .get('/api/v1/welcome', { context: withoutRefresh() })
+      .pipe(parsed(welcomeSchema));
   }
 }
