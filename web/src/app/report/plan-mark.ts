@@ -9,7 +9,12 @@ export function markOnPlan(shown: ShownFinding, units: Units): PathMark {
   const { finding, severity } = shown;
   const line = finding.worstLine;
   const { axis, at, by } = finding.data;
-  const base = { line, severity, words: `line ${formatCount(line)}` };
+  const base = {
+    line,
+    severity,
+    words: `line ${formatCount(line)}`,
+    ...(shown.tool === null ? {} : { tool: shown.tool }),
+  };
   if ((axis !== 'x' && axis !== 'y') || typeof at !== 'number') return base;
   const words =
     finding.rule === 'beyond-travel' && typeof by === 'number'

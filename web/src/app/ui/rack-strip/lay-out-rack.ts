@@ -87,7 +87,7 @@ const TALLEST = 200;
 const BADGE_ROOM = 40;
 /** Room under the labels' first baseline: place and mouth, then a line for each word. */
 const LABEL_ROOM = 46;
-const WORD_ROOM = 15;
+export const WORD_ROOM = 15;
 
 /** Lays out a rack as a person sees it who stands before it. */
 export function layOutRack(input: RackToDraw): RackDrawing {

@@ -15,7 +15,7 @@ import type { Units } from '#contracts';
 import type { Loading, Rack, Tool } from '#engine';
 import { wordFigure } from '../facts/measure';
 import type { Mouth, RackMark, RackSlot } from './lay-out-rack';
-import { layOutRack } from './lay-out-rack';
+import { MARKS_SHOWN, WORD_ROOM, layOutRack } from './lay-out-rack';
 
 /** Width assumed until the box has been measured: the page's usual width. */
 const USUAL_WIDTH = 1060;
@@ -83,6 +83,11 @@ export class RackStrip {
   protected turn(mouth: Mouth): number {
     return TURN[mouth];
   }
+  /** Baseline of a mark's word under its place; where there is no fork there is no mouth above it. */
+  protected wordLine(slot: RackSlot, index: number): number {
+    if (slot.pocket === null) return 37 + WORD_ROOM * index;
+    return 54 + WORD_ROOM * (slot.state === 'in-spindle' ? index + 1 : index);
+  }
   protected figure(length: number | null): string {
     return length === null ? '' : wordFigure(length, 'length', this.units());
   }
@@ -95,6 +100,9 @@ export class RackStrip {
   protected chooseByKey(event: Event, slot: RackSlot): void {
     event.preventDefault();
     this.choose(slot);
+  }
+  protected shownMarks(slot: RackSlot): readonly RackMark[] {
+    return slot.marks.slice(0, MARKS_SHOWN);
   }
   protected tone(slot: RackSlot): 'stop' | 'hold' | null {
     if (slot.state === 'not-in-rack') return 'stop';

@@ -108,6 +108,12 @@ describe('the place a finding speaks of', () => {
     expect(found).toMatchObject({ x: 1304.2, exact: false });
   });
 
+  test('is nowhere while another tool is in the spindle', () => {
+    const mark = { line: 45, severity: 'stop' as const, words: '' };
+    expect(findMark(runs, { ...mark, tool: 11 })).toBeNull();
+    expect(findMark(runs, { ...mark, tool: 4 })).not.toBeNull();
+  });
+
   test('is nowhere before the first motion', () => {
     expect(findMark(runs, { line: 3, severity: 'hold', words: '' })).toBeNull();
   });

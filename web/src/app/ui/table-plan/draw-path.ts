@@ -115,6 +115,8 @@ export function pathBox(runs: readonly Run[]): PlanBox | null {
 export interface PathMark {
   readonly line: number;
   readonly severity: 'stop' | 'hold' | 'note';
+  /** The tool it is about; a stretch run with another is not its place. */
+  readonly tool?: number;
   /** Words beside the place. */
   readonly words: string;
   /** A coordinate it must have, when the finding names one. */
@@ -137,7 +139,7 @@ export interface MarkedPath {
 export function findMark(runs: readonly Run[], mark: PathMark): MarkedPath | null {
   const index = runs.findLastIndex((run) => run.fromLine <= mark.line && run.points.length >= 2);
   const held = runs[index];
-  if (!held) return null;
+  if (!held || (mark.tool !== undefined && mark.tool !== held.tool)) return null;
   const { points } = held;
   const named = mark.axis !== undefined && mark.at !== undefined;
   const at = named
