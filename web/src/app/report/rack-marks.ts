@@ -1,4 +1,4 @@
-import type { RackMark } from '../ui/rack-strip/lay-out-rack';
+import type { RackMark } from '../ui/rack-strip/rack-slot';
 import type { ShownFinding } from './shown-finding';
 
 /** Two or three words for what a rule finds wrong with a tool or its place in the rack. */

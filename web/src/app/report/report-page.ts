@@ -23,15 +23,12 @@ import { toProblemError } from '../http/problem-error';
 import { CheckStarter } from '../programs/check-starter';
 import { CurrentUser } from '../sign-in/current-user';
 import { counted, formatCount } from '../ui/count';
-import { formatLength } from '../ui/length';
 import { Notice } from '../ui/notice/notice';
 import { PageHeader } from '../ui/page-header/page-header';
 import { RackStrip } from '../ui/rack-strip/rack-strip';
-import { kindOfVerdict } from '../ui/severity-mark/mark-kind';
 import { SeverityMark } from '../ui/severity-mark/severity-mark';
 import { Shortcuts } from '../ui/shortcuts/shortcuts';
 import { TablePlan } from '../ui/table-plan/table-plan';
-import { formatDuration, formatMoment, secondsBetween } from '../ui/time';
 import { VerdictBanner } from '../ui/verdict-banner/verdict-banner';
 import { CheckReport } from './check-report';
 import { FindingFilterBar } from './finding-filter/finding-filter';
@@ -39,15 +36,14 @@ import { FindingList } from './finding-list/finding-list';
 import { LineReport } from './line-report/line-report';
 import { markOnPlan } from './plan-mark';
 import { marksOf } from './rack-marks';
+import { factsOf, progressOf, verdictOf } from './report-head';
 import { RunTimes } from './run-times/run-times';
 import type { FindingFilter, RunMode } from './shown-finding';
 import { EVERYTHING, countSeverities, filterFindings, showFindings } from './shown-finding';
 import { ToolsUsed } from './tools-used/tools-used';
 import { WhatItCovers } from './what-it-covers/what-it-covers';
-import { shortHash, wordAgainst, wordChanges, wordCounts, wordCoverage } from './word-report';
+import { wordChanges } from './word-report';
 import { WorkZero } from './work-zero/work-zero';
-
-const VERDICT_LEADS = { stopped: 'Stopped.', held: 'Held.', clear: 'Clear.' } as const;
 
 /** The Check report: what one check says about one program on one machine, line by line. */
 @Component({
@@ -137,19 +133,7 @@ export class ReportPage {
 
   protected readonly facts = computed(() => {
     const details = this.report.details();
-    if (!details) return null;
-    const { check, sha256 } = details;
-    const took = secondsBetween(check.startedAt, check.finishedAt);
-    return {
-      revision: `revision ${check.programRevision}`,
-      hash: shortHash(sha256),
-      sha256,
-      lines: counted(check.lines, 'line'),
-      against: wordAgainst(check.against),
-      when: check.finishedAt
-        ? `checked ${formatMoment(check.finishedAt, new Date())}${took === null ? '' : `, took ${formatDuration(took)}`}`
-        : '',
-    };
+    return details && factsOf(details, new Date());
   });
   protected readonly changes = computed(() => {
     const details = this.report.details();
@@ -162,35 +146,11 @@ export class ReportPage {
   });
   protected readonly progress = computed(() => {
     const check = this.check();
-    if (!check) return null;
-    const share = check.lines > 0 ? (100 * check.linesRead) / check.lines : 0;
-    return {
-      share: Math.min(100, share),
-      lead: check.state === 'queued' ? 'Waiting.' : 'Checking.',
-      words:
-        check.state === 'queued'
-          ? 'The check stands in line and begins by itself.'
-          : `${formatCount(check.linesRead)} of ${counted(check.lines, 'line')} read.`,
-    };
+    return check && progressOf(check);
   });
   protected readonly verdict = computed(() => {
     const summary = this.summary();
-    if (!summary) return null;
-    const { verdict, counts, unattended, tools, seconds } = summary;
-    const lows = tools.flatMap(({ lowest }) => (lowest === null ? [] : [lowest]));
-    return {
-      kind: kindOfVerdict(verdict),
-      lead: VERDICT_LEADS[verdict],
-      words: `${wordCounts(counts)} ${wordCoverage(summary)}`,
-      unattended: {
-        kind: kindOfVerdict(unattended.verdict),
-        verdict: unattended.verdict,
-        words: wordCounts(unattended.counts),
-      },
-      run: formatDuration(seconds.total),
-      changes: String(tools.reduce((sum, tool) => sum + tool.changes, 0)),
-      lowest: formatLength(lows.length > 0 ? Math.min(...lows) : null, this.units()),
-    };
+    return summary && verdictOf(summary, this.units());
   });
   protected readonly callOrder = computed(() =>
     [...(this.summary()?.tools ?? [])]

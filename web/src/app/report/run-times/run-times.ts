@@ -25,9 +25,9 @@ export class RunTimes {
       { name: 'other', seconds: rest < 0.05 ? 0 : rest },
     ]
       .filter((part) => part.seconds > 0)
-      .map((part, index) => ({
+      .map((part) => ({
         ...part,
-        look: `part${index}`,
+        look: part.name.replace(' ', '-'),
         share: total > 0 ? (100 * part.seconds) / total : 0,
         time: formatDuration(part.seconds),
       }));

@@ -1,43 +1,9 @@
 import type { Loading, Opening, Pocket, Rack, Tool } from '#engine';
-import { drawTool, type ToolDrawing } from './draw-tool';
+import { drawTool } from './draw-tool';
+import type { Mouth, RackMark, RackSlot, SlotState } from './rack-slot';
+import { capital, remarksOf, sentenceOf, viewSentence } from './rack-words';
 
-/** A word set at a pocket or a tool: what is missing or wrong there. */
-export interface RackMark {
-  /** The pocket meant; without it, every place of `tool`. */
-  readonly pocket?: number;
-  readonly tool?: number;
-  readonly severity: 'stop' | 'hold';
-  /** Two or three words, such as "not loaded". */
-  readonly word: string;
-}
-
-/** Which way a fork's mouth points for the person looking at the strip. */
-export type Mouth = 'toward' | 'away' | 'left' | 'right';
-export type SlotState = 'loaded' | 'empty' | 'in-spindle' | 'not-in-rack' | 'by-hand';
-
-export interface RackSlot {
-  /** Stable while the rack stays: `P4` for pocket 4, `T7` for a called tool that has no pocket. */
-  readonly key: string;
-  readonly pocket: number | null;
-  readonly tool: number | null;
-  readonly state: SlotState;
-  readonly mouth: Mouth;
-  /** Centre, px from the left. */
-  readonly x: number;
-  /** Place in the order of call, counted from 1; null: not called. */
-  readonly order: number | null;
-  /** Whether the program leaves this one alone. */
-  readonly dimmed: boolean;
-  readonly marks: readonly RackMark[];
-  readonly drawing: ToolDrawing | null;
-  readonly label: string;
-  readonly place: string;
-  /** The slot in one sentence, for those who do not see the drawing. */
-  readonly sentence: string;
-  readonly toolName: string;
-  readonly diameter: number | null;
-  readonly gaugeLength: number | null;
-}
+export type { RackMark } from './rack-slot';
 
 export interface RackDrawing {
   readonly heading: string;
@@ -53,12 +19,23 @@ export interface RackDrawing {
   readonly gaugeLine: number;
   /** y of the labels' first baseline. */
   readonly labels: number;
-  readonly fork: {
+  /** The two tines beside a mouth, measured from the place's centre and the gauge line. */
+  readonly tines: {
+    readonly left: number;
+    readonly right: number;
+    readonly width: number;
     readonly top: number;
     readonly height: number;
-    readonly half: number;
-    readonly gap: number;
   };
+  /** The band that carries the forks. */
+  readonly rail: {
+    readonly x: number;
+    readonly y: number;
+    readonly width: number;
+    readonly height: number;
+  };
+  /** What lights up behind a place, measured from its centre. */
+  readonly ground: { readonly x: number; readonly width: number; readonly height: number };
   /** Whether the rail stands before the forks (they open away from the person looking). */
   readonly railInFront: boolean;
   /** What the drawing cannot show: what the spindle holds, tools fitted by hand. */
@@ -101,24 +78,23 @@ export function layOutRack(input: RackToDraw): RackDrawing {
   const slots = places.map((place, index) =>
     slotOf(input, place, { x: (index + 0.5) * slotWidth, scale }),
   );
-  const half = Math.min((rack.fork.width * scale) / 2 + 8, slotWidth / 2 - 3);
+  const width = slotWidth * Math.max(1, places.length);
   const labels = gaugeLine + deepest + 26;
+  const height = labels + LABEL_ROOM + WORD_ROOM * mostWords(slots);
+  const tines = tinesOf(rack, scale, slotWidth);
   return {
     heading: `${capital(rack.edge)} edge, as it stands`,
     view: viewSentence(rack, slots),
     ...ends(rack),
     slots,
     slotWidth,
-    width: slotWidth * Math.max(1, places.length),
-    height: labels + LABEL_ROOM + WORD_ROOM * mostWords(slots),
+    width,
+    height,
     gaugeLine,
     labels,
-    fork: {
-      top: rack.fork.below * scale,
-      height: Math.max(4, rack.fork.thickness * scale * 0.7),
-      half,
-      gap: half * 0.55,
-    },
+    tines,
+    rail: { x: 6, y: gaugeLine + tines.top + tines.height * 0.6, width: width - 12, height: 8 },
+    ground: { x: 3 - slotWidth / 2, width: slotWidth - 6, height: height - 2 },
     railInFront: isRailInFront(slots),
     remarks: remarksOf(loading),
   };
@@ -134,6 +110,19 @@ export function orderPockets(rack: Rack): readonly Pocket[] {
     return rack.edge === 'right' ? pocket.grip.y : pocket.grip.x;
   };
   return [...rack.pockets].sort((a, b) => along(a) - along(b) || a.number - b.number);
+}
+
+/** The plate of a fork seen along its mouth; the mouth itself is drawn, the setup does not give it. */
+function tinesOf(rack: Rack, scale: number, slotWidth: number): RackDrawing['tines'] {
+  const half = Math.min((rack.fork.width * scale) / 2 + 8, slotWidth / 2 - 3);
+  const gap = half * 0.55;
+  return {
+    left: -half,
+    right: gap,
+    width: half - gap,
+    top: rack.fork.below * scale,
+    height: Math.max(4, rack.fork.thickness * scale * 0.7),
+  };
 }
 
 function isRailInFront(slots: readonly RackSlot[]): boolean {
@@ -164,28 +153,6 @@ function ends(rack: Rack): { leftEnd: string; rightEnd: string } {
   if (rack.edge === 'left') return { leftEnd: 'back', rightEnd: 'front' };
   if (rack.edge === 'right') return { leftEnd: 'front', rightEnd: 'back' };
   return { leftEnd: 'left', rightEnd: 'right' };
-}
-
-const OPEN_WORDS: Readonly<Record<Mouth, string>> = {
-  toward: 'forks open toward you',
-  away: 'forks open away from you',
-  left: 'forks open to the left',
-  right: 'forks open to the right',
-};
-function viewSentence(rack: Rack, slots: readonly RackSlot[]): string {
-  const from = {
-    front: 'seen from the front',
-    back: 'seen from the front',
-    left: 'seen from the left of the machine, its back on your left',
-    right: 'seen from the right of the machine, its front on your left',
-  }[rack.edge];
-  const mouths = new Set(slots.filter((slot) => slot.pocket !== null).map((slot) => slot.mouth));
-  const [only] = mouths;
-  const open = mouths.size === 1 && only ? OPEN_WORDS[only] : 'forks open as drawn';
-  const called = slots.some((slot) => slot.order !== null);
-  return [from, ...(mouths.size > 0 ? [open] : [])]
-    .concat(called ? ['numbers in brass: order of call'] : [])
-    .join(' · ');
 }
 
 type Place = Pocket | { readonly homeless: number };
@@ -247,46 +214,6 @@ function placeOf(pocket: Pocket | null, state: SlotState): string {
   return state === 'by-hand' ? 'fitted by hand' : 'in no pocket';
 }
 
-const STATE_WORDS: Readonly<Record<SlotState, string>> = {
-  loaded: '',
-  empty: '',
-  'in-spindle': 'it is in the spindle, so this fork stands empty',
-  'not-in-rack': 'it is in no pocket of this rack',
-  'by-hand': 'it is fitted by hand',
-};
-function sentenceOf(slot: Omit<RackSlot, 'sentence'>): string {
-  const what =
-    slot.tool === null ? 'empty' : `${slot.label}${slot.toolName ? `, ${slot.toolName}` : ''}`;
-  const parts = [
-    slot.pocket === null ? what : `${capital(slot.place)}: ${what}`,
-    slot.pocket === null && slot.state === 'in-spindle'
-      ? 'it is in the spindle and has no pocket'
-      : STATE_WORDS[slot.state],
-    slot.order === null ? '' : `called ${ordinal(slot.order)}`,
-    ...slot.marks.map((mark) => mark.word),
-  ];
-  return `${parts.filter((part) => part !== '').join('; ')}.`;
-}
-
-function remarksOf(loading: Loading): readonly string[] {
-  const remarks: string[] = [];
-  if (loading.inSpindle === 'unknown') {
-    remarks.push('What the spindle holds is not known: any fork may be full. Look before the run.');
-  } else if (loading.inSpindle === null) {
-    remarks.push('The spindle holds nothing.');
-  } else if (!loading.pockets.some((each) => each.tool === loading.inSpindle)) {
-    remarks.push(`T${loading.inSpindle} is in the spindle and has no pocket.`);
-  } else {
-    remarks.push(`T${loading.inSpindle} is in the spindle; its fork stands empty now.`);
-  }
-  if (loading.byHand.length > 0) {
-    remarks.push(
-      `Fitted by hand when called: ${loading.byHand.map((each) => `T${each}`).join(', ')}.`,
-    );
-  }
-  return remarks;
-}
-
 function drawn(input: RackToDraw): readonly Tool[] {
   const shown = new Set([...input.loading.pockets.map((each) => each.tool), ...input.callOrder]);
   return input.tools.filter((tool) => shown.has(tool.number));
@@ -302,13 +229,6 @@ function scaleFor(input: RackToDraw, slotWidth: number): number {
   return Math.min(GREATEST_SCALE, (slotWidth - 14) / widest, TALLEST / tallest);
 }
 
-export function ordinal(count: number): string {
-  const words = ['first', 'second', 'third', 'fourth', 'fifth', 'sixth', 'seventh', 'eighth'];
-  return words[count - 1] ?? `as number ${count}`;
-}
-function capital(text: string): string {
-  return text.charAt(0).toUpperCase() + text.slice(1);
-}
 function clamp(value: number, least: number, greatest: number): number {
   return Math.min(greatest, Math.max(least, value));
 }

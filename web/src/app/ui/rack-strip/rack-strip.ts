@@ -14,7 +14,7 @@ import {
 import type { Units } from '#contracts';
 import type { Loading, Rack, Tool } from '#engine';
 import { wordFigure } from '../facts/measure';
-import type { Mouth, RackMark, RackSlot } from './lay-out-rack';
+import type { Mouth, RackMark, RackSlot } from './rack-slot';
 import { MARKS_SHOWN, WORD_ROOM, layOutRack } from './lay-out-rack';
 
 /** Width assumed until the box has been measured: the page's usual width. */

@@ -24,6 +24,7 @@ const USUAL_WIDTH = 340;
 const TALLEST = 560;
 const MARGIN = 22;
 const GREATEST_ZOOM = 80;
+const ZOOM_STEP = 1.5;
 /** How far a drawn path may lie from the true one (px): below what an eye can tell. */
 const UNSEEN = 0.35;
 /** Tools beyond this many share colours and dashes again; the numbers always tell them apart. */
@@ -55,6 +56,7 @@ export class TablePlan {
 
   private readonly frame = viewChild.required<ElementRef<HTMLElement>>('frame');
 
+  protected readonly zoomStep = ZOOM_STEP;
   readonly #width = signal(USUAL_WIDTH);
   readonly #transform = signal<ZoomTransform>(zoomIdentity);
   /** The tool shown alone; null: all. */
@@ -190,6 +192,9 @@ export class TablePlan {
   protected zoomBy(factor: number): void {
     this.#zoom?.scaleBy(select(this.frame().nativeElement), factor);
   }
+  protected zoomOut(): void {
+    this.zoomBy(1 / ZOOM_STEP);
+  }
   protected showAll(): void {
     this.#zoom?.transform(select(this.frame().nativeElement), zoomIdentity);
   }
@@ -200,9 +205,9 @@ export class TablePlan {
       ArrowRight: () => this.#move(-1, 0),
       ArrowUp: () => this.#move(0, 1),
       ArrowDown: () => this.#move(0, -1),
-      '+': () => this.zoomBy(1.5),
-      '=': () => this.zoomBy(1.5),
-      '-': () => this.zoomBy(1 / 1.5),
+      '+': () => this.zoomBy(ZOOM_STEP),
+      '=': () => this.zoomBy(ZOOM_STEP),
+      '-': () => this.zoomOut(),
       '0': () => this.showAll(),
     };
     const act = acts[event.key];
