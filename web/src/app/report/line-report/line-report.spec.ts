@@ -172,6 +172,29 @@ test('says so when lines cannot be read, and reads them on the next try', async 
   expect(host.textContent).toContain('G1 X3.');
 });
 
+test('Enter on the report unfolds its next stretch; on a button it is the button’s', async () => {
+  const { host, rows, settle } = await show();
+  const press = (on: Element) =>
+    on.dispatchEvent(new KeyboardEvent('keydown', { key: 'Enter', bubbles: true }));
+  press(host.querySelector('.finding .place')!);
+  await settle();
+  expect(rows()).toContain('6–410');
+  press(host.querySelector('.scroller')!);
+  await settle();
+  expect(rows()).toContain('26–410');
+});
+
+test('an empty program shows what was found and waits for no text', async () => {
+  const [empty] = FINDINGS;
+  const finding = { ...empty!, line: 1, endLine: 1, worstLine: 1 };
+  const { host, rows } = await show({
+    lineCount: 0,
+    findings: showFindings([finding], 'attended', 'mm'),
+  });
+  expect(rows()).toEqual(['1', 'Sentence of finding 11.']);
+  expect(host.querySelector('.coming')).toBeNull();
+});
+
 test('a million lines make no more rows than a window holds', async () => {
   const { host, component, settle } = await show({ lineCount: 1_000_000, findings: [] });
   host.querySelector<HTMLButtonElement>('.ways button:last-child')!.click();

@@ -126,7 +126,8 @@ export class LineReport {
       rows: this.#rows(),
       findings: this.findings(),
       underlines: this.#underlines(),
-      text: (line) => this.lines.text(line),
+      // An empty program still has a line to set findings at; there is nothing to fetch for it.
+      text: (line) => (this.lineCount() === 0 ? '' : this.lines.text(line)),
       isMeasured: (id) => this.#heights().has(id),
     });
   });
@@ -228,6 +229,13 @@ export class LineReport {
     const height = Math.ceil(card) + AROUND_CARD;
     if (this.#heights().get(id) === height) return;
     this.#heights.update((heights) => new Map(heights).set(id, height));
+  }
+
+  /** Enter on the report itself, not on a fold's own button. */
+  protected unfoldByKey(event: Event): void {
+    if (event.target !== event.currentTarget) return;
+    event.preventDefault();
+    this.unfoldNext();
   }
 
   protected scrolled(): void {

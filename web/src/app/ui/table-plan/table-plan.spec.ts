@@ -45,6 +45,15 @@ test('draws a path for each tool and kind, and names the tools', async () => {
   expect(legend).toEqual(['T4', 'T7']);
 });
 
+test('a spindle without a tool, or with one nobody knows, has no tool number', async () => {
+  const runs = [null, 0].map((tool, index) => ({ ...PATH.runs[1]!, tool, fromLine: index + 1 }));
+  const { host } = await show({ path: { ...PATH, runs } });
+  const legend = [...host.querySelectorAll('.legend button')].map((each) =>
+    each.textContent.trim(),
+  );
+  expect(legend).toEqual(['spindle as found', 'no tool']);
+});
+
 test('says in a table what it draws, in the person’s unit', async () => {
   const { host } = await show({ units: 'inch' });
   const row = host.querySelector('tbody tr')!.textContent;

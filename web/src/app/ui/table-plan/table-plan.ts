@@ -170,7 +170,8 @@ export class TablePlan {
   }
 
   protected nameOf(tool: number | null): string {
-    return tool === null ? 'spindle as found' : `T${tool}`;
+    if (tool === null) return 'spindle as found';
+    return tool === 0 ? 'no tool' : `T${tool}`;
   }
   protected lookOf(each: PathTool): string {
     return `look${this.#lookOf().get(each.tool) ?? 0}`;
