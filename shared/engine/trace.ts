@@ -41,12 +41,16 @@ export interface TraceOptions {
 /** Walks a program for its motions alone: no rule runs. */
 export function startTrace(
   setup: Setup,
-  emit: (motion: TraceMotion) => void,
+  emit: ((motion: TraceMotion) => void) | undefined,
   options: TraceOptions = {},
 ): Trace {
-  const walk = new Walk(openShop(setup), [traceObserver(emit), ...(options.observers ?? [])], {
-    skips: options.blockDelete === 'on',
-  });
+  const walk = new Walk(
+    openShop(setup),
+    [...(emit ? [traceObserver(emit)] : []), ...(options.observers ?? [])],
+    {
+      skips: options.blockDelete === 'on',
+    },
+  );
   return {
     push: (bytes) => walk.push(bytes),
     endOfText: () => walk.endOfText(),

@@ -21,28 +21,48 @@ const CODE_ROUNDING = 0.001;
 
 /** Sorts the words of a line into `block`; what cannot stand together becomes a fault of the line. */
 export function parseBlock(words: LineWords, block: Block, dialect: BlockDialect): void {
-  const { letters, count } = words;
-  block.groups = 0;
-  block.mCount = 0;
-  block.mist = false;
-  block.flood = false;
+  const { letters, values, count } = words;
+  const { wordOf, codes, codeWords } = block;
+  const { g } = dialect;
+  if (block.mCount > 0) clearMiscellaneous(block);
   if (block.others.length > 0) block.others.length = 0;
+  block.groups = 0;
   let seen = 0;
   for (let word = 0; word < count; word++) {
     const letter = letters[word]!;
-    if (letter === LETTER.G) addG(words, block, dialect, word);
-    else if (letter === LETTER.M) addM(words, block, dialect, word);
+    if (letter === LETTER.G) {
+      // The first code of its group, a whole number: nearly all of them.
+      const code = values[word]! | 0;
+      const group = code === values[word] && code >>> 0 < WHOLE_CODES ? g[code * 10]! : NO_GROUP;
+      if (group < 0 || (block.groups & CAREFUL) !== 0 || (block.groups & (1 << group)) !== 0) {
+        addG(words, block, dialect, word);
+        continue;
+      }
+      block.groups |= 1 << group;
+      codes[group] = code * 10;
+      codeWords[group] = word;
+    } else if (letter === LETTER.M) addM(words, block, dialect, word);
     else {
       const bit = 1 << letter;
       if ((seen & bit) !== 0) noteRepeated(words, letter, word);
       seen |= bit;
-      block.wordOf[letter] = word;
+      wordOf[letter] = word;
     }
   }
   block.seen = seen;
   if ((seen & NUMBERED) !== 0) checkLineNumber(words, block, dialect);
   if (dialect.increment > 0) countIncrements(words, dialect.increment);
   if ((block.groups & CLAIMS) !== 0) checkClaims(words, block, dialect);
+}
+
+const WHOLE_CODES = TABLE_LENGTH / 10;
+/** Groups beside which another code may be a conflict although its own group is free. */
+const CAREFUL = (1 << GROUP.motion) | (1 << GROUP.cycle);
+
+function clearMiscellaneous(block: Block): void {
+  block.mCount = 0;
+  block.mist = false;
+  block.flood = false;
 }
 
 const NUMBERED = letterBits('N');
@@ -124,9 +144,8 @@ function checkLineNumber(words: LineWords, block: Block, dialect: BlockDialect):
       voids: true,
     });
   }
-  const isFine =
-    0 <= value && Number.isInteger(value) && (!dialect.isStrict || value <= HIGHEST_LINE_NUMBER);
-  if (isFine) return;
+  const isWhole = (value | 0) === value || Number.isInteger(value);
+  if (0 <= value && isWhole && (!dialect.isStrict || value <= HIGHEST_LINE_NUMBER)) return;
   words.fault({
     problem: 'out-of-range-word',
     from: words.starts[word]!,
@@ -148,7 +167,7 @@ const INCREMENTAL_LETTERS = letterBits('ABCIJKQRUVWXYZ');
 function countIncrements(words: LineWords, increment: number): void {
   for (let word = 0; word < words.count; word++) {
     const letter = words.letters[word]!;
-    if (words.points[word] === 1 || (INCREMENTAL_LETTERS & (1 << letter)) === 0) continue;
+    if ((INCREMENTAL_LETTERS & (1 << letter)) === 0 || hasPoint(words, word)) continue;
     const value = words.values[word]!;
     if (value === 0) continue;
     words.values[word] = value * increment;
@@ -165,6 +184,12 @@ function countIncrements(words: LineWords, increment: number): void {
     });
   }
 }
+
+function hasPoint({ bytes, starts, ends }: LineWords, word: number): boolean {
+  for (let at = starts[word]!; at < ends[word]!; at++) if (bytes[at] === POINT) return true;
+  return false;
+}
+const POINT = 46;
 
 const CLAIMS = 1 << GROUP.once;
 /** G10, G28, G30 and the setting codes of G92 and G52 each want the axis words for themselves. */

@@ -15,6 +15,9 @@ const STRICT_TOLERANCE_INCH = 0.0002 * 25.4;
 /** Radii are compared after an addition and a root, so their last digits mean nothing. */
 const RADIUS_ROUNDING = 1e-9;
 
+/** Sums of decimals part in their last digits; an end this close to the start is the start, mm. */
+const SAME_POINT = 1e-9;
+
 /** Centre letters of each plane in plane order, the third that has no meaning there, and its axis letters. */
 const CENTRES = [
   { u: I, v: J, other: K, ends: [LETTER.X, LETTER.Y] },
@@ -42,9 +45,12 @@ export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): vo
   const toV = index === 0 ? to.y : index === 1 ? to.x : to.z;
   const circle = findCircle(run, turning, fromU, fromV, toU, toV);
   if (!circle) return standAt(run, to);
-  const startAngle = Math.atan2(fromV - circle.v, fromU - circle.u);
-  const endAngle = Math.atan2(toV - circle.v, toU - circle.u);
-  const turn = findTurn(turning, startAngle, endAngle, fromU === toU && fromV === toV);
+  const startU = fromU - circle.u;
+  const startV = fromV - circle.v;
+  const endU = toU - circle.u;
+  const endV = toV - circle.v;
+  const isFull = Math.abs(toU - fromU) + Math.abs(toV - fromV) <= SAME_POINT;
+  const turn = isFull ? turning * TURN : findTurn(turning, startU, startV, endU, endV);
 
   motion.kind = 'arc';
   motion.by = 'program';
@@ -61,7 +67,7 @@ export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): vo
   motion.centreV = circle.v;
   motion.radius = circle.radius;
   motion.turn = turn;
-  setExtremes(motion, index, startAngle, turn);
+  setExtremes(motion, index, quartersPassed(turn, startU, startV, endU, endV));
   const depth = index === 0 ? to.z - machine.z : index === 1 ? to.y - machine.y : to.x - machine.x;
   const along = circle.radius * turn;
   motion.length = Math.sqrt(along * along + depth * depth);
@@ -74,13 +80,17 @@ export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): vo
   run.tell.motion(motion);
 }
 
-function findTurn(turning: 1 | -1, start: number, end: number, isFull: boolean): number {
-  if (isFull) return turning * TURN;
-  let turn = end - start;
-  if (turning > 0) {
-    if (turn <= 0) turn += TURN;
-  } else if (turn >= 0) turn -= TURN;
-  return turn;
+/** The angle from start to end in the direction of the arc, by one arc tangent of sine and cosine. */
+function findTurn(
+  turning: 1 | -1,
+  startU: number,
+  startV: number,
+  endU: number,
+  endV: number,
+): number {
+  const turn = Math.atan2(startU * endV - startV * endU, startU * endU + startV * endV);
+  if (turning > 0) return turn <= 0 ? turn + TURN : turn;
+  return turn >= 0 ? turn - TURN : turn;
 }
 
 function findCircle(
@@ -121,6 +131,9 @@ function findCircle(
   return circleByCentre(run, fromU, fromV, toU, toV);
 }
 
+/** Math.hypot guards against overflow that no machine reaches, at several times the cost. */
+const distance = (u: number, v: number): number => Math.sqrt(u * u + v * v);
+
 function circleByCentre(
   run: Run,
   fromU: number,
@@ -143,8 +156,8 @@ function circleByCentre(
     circle.u = fromU + wordU;
     circle.v = fromV + wordV;
   }
-  const start = Math.hypot(fromU - circle.u, fromV - circle.v);
-  const end = Math.hypot(toU - circle.u, toV - circle.v);
+  const start = distance(fromU - circle.u, fromV - circle.v);
+  const end = distance(toU - circle.u, toV - circle.v);
   circle.radius = start;
   if (start === 0) {
     tellProblem(run, 'arc-impossible', { letters: 'IJK' }, { reason: 'no-radius' });
@@ -184,7 +197,7 @@ function circleByRadius(
   const radius = run.block.value(R) * run.machine.unit;
   const du = toU - fromU;
   const dv = toV - fromV;
-  const chord = Math.hypot(du, dv);
+  const chord = distance(du, dv);
   if (chord === 0 || radius === 0) {
     tellProblem(
       run,
@@ -221,24 +234,47 @@ function circleByRadius(
   return circle;
 }
 
+/** 0 to 3 from the positive first axis on, each holding the axis it begins with. */
+function quarterOf(u: number, v: number): number {
+  if (v >= 0) return u > 0 ? 0 : v > 0 ? 1 : 2;
+  return u < 0 ? 2 : 3;
+}
+
+/**
+ * Which of the four quadrant points an arc passes, bit 0 for the one on the positive first axis, bit 1 on
+ * the positive second, and so on. An end that lies on one may count; it is an end of the arc anyway.
+ */
+function quartersPassed(
+  turn: number,
+  startU: number,
+  startV: number,
+  endU: number,
+  endV: number,
+): number {
+  const isCounter = turn > 0;
+  const first = isCounter ? quarterOf(startU, startV) : quarterOf(endU, endV);
+  const last = isCounter ? quarterOf(endU, endV) : quarterOf(startU, startV);
+  let crossed = (last - first) & 3;
+  // Back in the quarter it began in: either it never left, or it went all the way round.
+  if (crossed === 0 && Math.abs(turn) > QUARTER) crossed = 4;
+  let passed = 0;
+  for (let quarter = first + 1; quarter <= first + crossed; quarter++) passed |= 1 << (quarter & 3);
+  return passed;
+}
+
 /** True extremes: both ends and every quadrant point that the arc passes. */
-function setExtremes(motion: Motion, index: number, start: number, turn: number): void {
-  const { centreU, centreV, radius } = motion;
-  motion.minX = Math.min(motion.fromX, motion.toX);
-  motion.maxX = Math.max(motion.fromX, motion.toX);
-  motion.minY = Math.min(motion.fromY, motion.toY);
-  motion.maxY = Math.max(motion.fromY, motion.toY);
-  motion.minZ = Math.min(motion.fromZ, motion.toZ);
-  motion.maxZ = Math.max(motion.fromZ, motion.toZ);
-  const low = turn > 0 ? start : start + turn;
-  const high = turn > 0 ? start + turn : start;
-  for (let quarter = Math.ceil(low / QUARTER); quarter * QUARTER <= high; quarter++) {
-    const part = quarter & 3;
-    if (part === 0) widenU(motion, index, centreU + radius);
-    else if (part === 1) widenV(motion, index, centreV + radius);
-    else if (part === 2) widenU(motion, index, centreU - radius);
-    else widenV(motion, index, centreV - radius);
-  }
+function setExtremes(motion: Motion, index: number, passed: number): void {
+  const { centreU, centreV, radius, fromX, fromY, fromZ, toX, toY, toZ } = motion;
+  motion.minX = fromX < toX ? fromX : toX;
+  motion.maxX = fromX < toX ? toX : fromX;
+  motion.minY = fromY < toY ? fromY : toY;
+  motion.maxY = fromY < toY ? toY : fromY;
+  motion.minZ = fromZ < toZ ? fromZ : toZ;
+  motion.maxZ = fromZ < toZ ? toZ : fromZ;
+  if (passed & 1) widenU(motion, index, centreU + radius);
+  if (passed & 2) widenV(motion, index, centreV + radius);
+  if (passed & 4) widenU(motion, index, centreU - radius);
+  if (passed & 8) widenV(motion, index, centreV - radius);
 }
 
 function widenU(motion: Motion, index: number, value: number): void {

@@ -10,6 +10,7 @@ import { NO_MOTION, SETTING } from './machine';
 import * as modal from './modal-words';
 import {
   hasAxisWord,
+  moveByWords,
   moveStraight,
   namedAxes,
   readMachineTarget,
@@ -28,8 +29,7 @@ const { F, S, T } = LETTER;
 const MOTION_BIT = 1 << GROUP.motion;
 const STOP_BIT = 1 << GROUP.stop;
 const CENTRE_BITS = letterBits('IJKR');
-/** Words that only a few blocks hold; without them a block is motion, feed and speed alone. */
-const SETTING_LETTERS = letterBits('T');
+const FEED_OR_SPEED = letterBits('FS');
 const MACHINE_MOVE = 530;
 const DWELL = 40;
 /** Codes of the once group after which the block goes on to its motion. */
@@ -44,13 +44,27 @@ export function carryOut(run: Run): void {
   const { groups, seen } = block;
   run.refused = false;
   if ((seen & RARE_LETTERS) !== 0) checkUse(run);
-  if (groups & (1 << GROUP.feedMode)) modal.applyFeedMode(run);
-  if (seen & (1 << F)) modal.applyFeed(run);
-  if (seen & (1 << S)) modal.applySpeed(run);
-  if ((groups & ~MOTION_BIT) !== 0 || (seen & SETTING_LETTERS) !== 0 || block.others.length > 0)
+  if ((groups & (1 << GROUP.feedMode)) !== 0) modal.applyFeedMode(run);
+  if ((seen & FEED_OR_SPEED) !== 0) {
+    if ((seen & (1 << F)) !== 0) modal.applyFeed(run);
+    if ((seen & (1 << S)) !== 0) modal.applySpeed(run);
+  }
+  if ((groups & ~MOTION_BIT) !== 0 || (seen & (1 << T)) !== 0 || block.others.length > 0)
     carryOutSettings(run);
-  if (!run.refused) carryOutMotion(run);
+  if (!run.refused) {
+    if ((groups & ~MOTION_BIT) === 0 && run.loneMachineMove === undefined) carryOutPlain(run);
+    else carryOutMotion(run);
+  }
   if ((groups & STOP_BIT) !== 0 && !run.refused) carryOutStop(run);
+}
+
+/** A block with at most a motion code, and no code of its own block to mind. */
+function carryOutPlain(run: Run): void {
+  const { block, machine } = run;
+  if (block.groups !== 0 && machine.motionCode !== block.codes[GROUP.motion])
+    setMotionMode(run, block.codes[GROUP.motion]!, GROUP.motion);
+  if (hasAxisWord(block.seen)) moveInProgram(run);
+  else if (block.groups !== 0 || (block.seen & CENTRE_BITS) !== 0) moveWithoutAxes(run);
 }
 
 const SETTINGS: readonly (readonly [number, (run: Run) => void])[] = [
@@ -138,13 +152,11 @@ function moveInProgram(run: Run): void {
   const named = namedAxes(block.seen);
   if ((machine.unsetAxes & named) !== 0 && machine.isAbsolute) tellIfUnset(run, named);
   run.motion.named = named;
+  if (code === 10) return moveByWords(run, false, feedOf(run));
+  if (code === 0) return moveByWords(run, true, NaN);
   if (isCycle(code)) return drill(run, code, feedOf(run));
   const target = readTarget(run, run.target);
   switch (code) {
-    case 10:
-      return moveStraight(run, 'feed', 'program', target, feedOf(run));
-    case 0:
-      return moveStraight(run, 'rapid', 'program', target, NaN);
     case 20:
       return moveArc(run, -1, target, feedOf(run));
     case 30:

@@ -32,11 +32,11 @@ export function emptyMotion(): Motion {
     fromX: 0.5,
     fromY: 0.5,
     fromZ: 0.5,
-    fromA: 0.5,
+    fromA: 0,
     toX: 0.5,
     toY: 0.5,
     toZ: 0.5,
-    toA: 0.5,
+    toA: 0,
     minX: 0.5,
     minY: 0.5,
     minZ: 0.5,
@@ -95,6 +95,61 @@ export function standAt({ machine }: Run, to: Target): void {
   machine.y = to.y;
   machine.z = to.z;
   machine.a = to.a;
+}
+
+/**
+ * G0 and G1 in program coordinates: the hot path of every check. It is moveStraight and readTarget in one,
+ * so that no coordinate leaves a register between a word and the motion.
+ */
+export function moveByWords(run: Run, isRapid: boolean, feed: number): void {
+  const { block, machine, motion } = run;
+  const { values } = block.words;
+  const { wordOf, seen } = block;
+  const { unit, isAbsolute } = machine;
+  const fromX = machine.x;
+  const fromY = machine.y;
+  const fromZ = machine.z;
+  let x = fromX;
+  let y = fromY;
+  let z = fromZ;
+  if ((seen & X_BIT) !== 0) x = values[wordOf[X]!]! * unit + (isAbsolute ? machine.baseX : fromX);
+  if ((seen & Y_BIT) !== 0) y = values[wordOf[Y]!]! * unit + (isAbsolute ? machine.baseY : fromY);
+  if ((seen & Z_BIT) !== 0) z = values[wordOf[Z]!]! * unit + (isAbsolute ? machine.baseZ : fromZ);
+  machine.x = x;
+  machine.y = y;
+  machine.z = z;
+  motion.kind = isRapid ? 'rapid' : 'feed';
+  motion.by = 'program';
+  motion.fromX = fromX;
+  motion.fromY = fromY;
+  motion.fromZ = fromZ;
+  motion.toX = x;
+  motion.toY = y;
+  motion.toZ = z;
+  motion.minX = fromX < x ? fromX : x;
+  motion.maxX = fromX < x ? x : fromX;
+  motion.minY = fromY < y ? fromY : y;
+  motion.maxY = fromY < y ? y : fromY;
+  motion.minZ = fromZ < z ? fromZ : z;
+  motion.maxZ = fromZ < z ? z : fromZ;
+  const dx = x - fromX;
+  const dy = y - fromY;
+  const dz = z - fromZ;
+  const length = Math.sqrt(dx * dx + dy * dy + dz * dz);
+  motion.moves = length !== 0;
+  motion.length = length;
+  motion.feed = feed;
+  if ((seen & A_BIT) !== 0 || motion.fromA !== motion.toA) turnByWord(run, length);
+  if (machine.feedMode === 'inverse-time') motion.feed = feed * motion.length;
+  run.tell.motion(motion);
+}
+
+/** The rotary part of a motion; its length counts degrees where nothing else moves. */
+function turnByWord({ block, machine, motion }: Run, length: number): void {
+  motion.fromA = machine.a;
+  if (block.has(A)) machine.a = block.value(A) + (machine.isAbsolute ? machine.baseA : machine.a);
+  motion.toA = machine.a;
+  if (length === 0) motion.length = Math.abs(motion.toA - motion.fromA);
 }
 
 /** Moves in a straight line, tells it, and stands at its end. `feed` is NaN on rapids. */

@@ -20,8 +20,10 @@ export function checkUse(run: Run): void {
   const { block, machine, shop } = run;
   let unused = block.seen & RARE_LETTERS;
   const code = motionInForce(run);
-  if (code === 20 || code === 30) unused &= ~CENTRES;
-  if (unused === 0) return;
+  if (code === 20 || code === 30) {
+    unused &= ~CENTRES;
+    if (unused === 0) return;
+  }
   // An unknown or declared code takes its words with it; the code itself is told if it is unknown.
   if (block.others.length > 0) unused &= FOREIGN & ~letterBits('EUVW');
   unused &= ~usedBy(run, code);

@@ -58,7 +58,7 @@ export class Walk implements LineReader {
     this.source.end();
     const { run } = this;
     const { machine, tell, endedBy } = run;
-    this.words.clear(new Uint8Array(0), 0);
+    this.words.clear();
     machine.line = this.lastWritten;
     const place = machine.place();
     if (this.isEmpty) tell.problem({ problem: 'empty-program', place, facts: {} });
@@ -71,6 +71,7 @@ export class Walk implements LineReader {
 
   readLines(bytes: Uint8Array, at: number, end: number): void {
     const { words } = this;
+    words.bytes = bytes;
     while (at < end) {
       const next = readLine(bytes, at, words);
       this.linesRead++;
@@ -92,8 +93,7 @@ export class Walk implements LineReader {
 
   private tellOverlong(length: number): void {
     const { words, run } = this;
-    words.clear(words.bytes, 0);
-    words.end = 0;
+    words.clear();
     this.lastWritten = run.machine.line = this.linesRead;
     this.blocks++;
     this.isEmpty = false;
@@ -108,32 +108,56 @@ export class Walk implements LineReader {
     if (words.end === words.start) return;
     run.machine.line = this.linesRead;
     this.lastWritten = this.linesRead;
+    if (words.isRare) this.takeRareLine();
+    else if (words.count > 0) {
+      this.blocks++;
+      if (this.isDone) return this.tellTextAfter();
+      parseBlock(words, this.block, run.dialect);
+      this.isEmpty = false;
+      // Sorting may find conflicts, and codes that no table places.
+      if (words.isRare || this.block.others.length > 0) this.finishRareBlock();
+      else this.finishBlock();
+    }
+    if (words.end - words.start > this.longestBlock && !this.isDone) this.tellLong();
+  }
+
+  private finishBlock(): void {
+    const { run } = this;
+    carryOut(run);
+    run.tell.block();
+    if (run.endedBy !== '') this.isDone = true;
+  }
+
+  private takeRareLine(): void {
+    const { words, run } = this;
     if (words.percentAt >= 0) this.takePercent();
     if (words.comments.length > 0 && run.dialect.isStrict) refuseLineComments(words);
     const hasWords = words.count > 0 || words.faults.length > 0 || words.label !== '';
-    if (hasWords) this.takeBlock();
+    if (hasWords) this.takeRareBlock();
     else if (words.comments.length > 0 && !this.isDone) this.tellComments();
-    if (!this.isDone && words.end - words.start > this.longestBlock) this.tellLong();
   }
 
-  private takeBlock(): void {
+  private takeRareBlock(): void {
     const { words, run } = this;
     this.blocks++;
     if (this.isDone) return this.tellTextAfter();
     if (words.skippable) {
-      this.firstSkippable ??= run.machine.place({
-        bytes: [words.skipAt - words.start, words.skipAt - words.start + 1],
-      });
+      const at = words.skipAt - words.start;
+      this.firstSkippable ??= run.machine.place({ bytes: [at, at + 1] });
       if (this.options.skips) return;
     }
     parseBlock(words, this.block, run.dialect);
     if (words.count > 0 || words.faults.length > 0) this.isEmpty = false;
+    this.finishRareBlock();
+  }
+
+  private finishRareBlock(): void {
+    const { words, run } = this;
     if (this.block.others.length > 0) this.resolveOthers();
     if (words.faults.length > 0) this.tellFaults();
     if (words.comments.length > 0) this.tellComments();
-    if (!words.isVoid) carryOut(run);
-    run.tell.block();
-    if (run.endedBy !== '') this.isDone = true;
+    if (words.isVoid) run.tell.block();
+    else this.finishBlock();
   }
 
   /** A declared code whose conditions do not hold here keeps its built-in meaning. */

@@ -11,6 +11,8 @@ export const PARAMETER = 8;
 export const STRAY_VALUE = 9;
 export const CLOSE_COMMENT = 10;
 export const COLON = 11;
+/** The letter O: a label, or a slip for a nought, but never an ordinary word. */
+export const LETTER_O = 12;
 
 export const CLASS_OF = classes();
 
@@ -19,7 +21,8 @@ function classes(): Uint8Array {
   const set = (text: string, kind: number) => {
     for (const character of text) table[character.charCodeAt(0)] = kind;
   };
-  set('ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz', LETTER);
+  set('ABCDEFGHIJKLMNPQRSTUVWXYZabcdefghijklmnpqrstuvwxyz', LETTER);
+  set('Oo', LETTER_O);
   set(' \t', BLANK);
   set('\n\r', LINE_END);
   set('(', OPEN_COMMENT);
@@ -32,3 +35,16 @@ function classes(): Uint8Array {
   set(':', COLON);
   return table;
 }
+
+export const isLetter = (byte: number): boolean =>
+  CLASS_OF[byte] === LETTER || CLASS_OF[byte] === LETTER_O;
+
+/** 1 for what, behind a number, makes it another number: more digits, a point, a comma, an exponent. */
+export const CONTINUES_NUMBER = Uint8Array.from({ length: 256 }, (_, byte) =>
+  '0123456789.,Ee'.includes(String.fromCharCode(byte)) ? 1 : 0,
+);
+
+/** Powers of ten that are exact in a double. */
+export const POWERS_OF_TEN = Float64Array.from({ length: 23 }, (_, exponent) =>
+  Number(`1e${exponent}`),
+);

@@ -6,6 +6,9 @@ export const MOST_WORDS = 200;
 /** Faults noted on one line; further ones say nothing new. */
 const MOST_FAULTS = 8;
 
+/** Comments of one line that are kept; nobody writes as many. */
+const MOST_COMMENTS = 200;
+
 /** A fault of reading: which rule it is, the bytes that show it, and the figures for its sentence. */
 export interface Fault {
   readonly problem: Problem;
@@ -29,6 +32,7 @@ export interface CommentText {
  * plain motion allocates nothing. Positions are indexes into `bytes`; letters are 0 for A … 25 for Z.
  */
 export class LineWords {
+  /** The bytes the line stands in; whoever reads lines sets it for all lines of a stretch. */
   bytes: Uint8Array = new Uint8Array(0);
   start = 0;
   /** One past the last byte of the line, its end mark not counted. */
@@ -38,15 +42,16 @@ export class LineWords {
   readonly values = new Float64Array(MOST_WORDS);
   readonly starts = new Int32Array(MOST_WORDS);
   readonly ends = new Int32Array(MOST_WORDS);
-  /** Whether the number was written with a decimal point: 1 or 0. */
-  readonly points = new Uint8Array(MOST_WORDS);
+  /** Whether the line ends with a line end; only the last line of a text may not. */
+  ended = true;
+
+  /** Whether any field below differs from its empty state: on most lines none does. */
+  isRare = false;
   /** Whether the line begins with the block-delete mark, and where that stands. */
   skippable = false;
   skipAt = 0;
   /** Where a percent sign stands, or -1. */
   percentAt = -1;
-  /** Whether the line ends with a line end; only the last line of a text may not. */
-  ended = true;
   /** An O word's label as written, such as '1000' or '<name>'; '' for none. */
   label = '';
   labelFrom = 0;
@@ -58,17 +63,27 @@ export class LineWords {
   /** Bits of all bytes of comments and odd characters; nothing else can lie outside ASCII. */
   bits = 0;
 
-  clear(bytes: Uint8Array, start: number): void {
-    this.bytes = bytes;
-    this.start = start;
-    this.count = 0;
+  /** Empties what the last rare line left. */
+  clearRare(): void {
+    this.isRare = false;
     this.skippable = false;
     this.percentAt = -1;
-    if (this.label !== '') this.label = '';
-    if (this.comments.length > 0) this.comments.length = 0;
-    if (this.faults.length > 0) this.faults.length = 0;
+    this.label = '';
+    this.comments.length = 0;
+    this.faults.length = 0;
     this.isVoid = false;
     this.bits = 0;
+  }
+
+  /** A line with nothing on it, for what is told once the text is over. */
+  clear(): void {
+    this.clearRare();
+    this.start = this.end = this.count = 0;
+  }
+
+  comment(from: number, to: number, isLine: boolean): void {
+    this.isRare = true;
+    if (this.comments.length < MOST_COMMENTS) this.comments.push({ from, to, isLine });
   }
 
   /** Whether the line holds anything but plain ASCII, so that bytes and columns differ. */
@@ -77,6 +92,7 @@ export class LineWords {
   }
 
   fault(fault: Fault): void {
+    this.isRare = true;
     if (fault.voids) this.isVoid = true;
     if (this.faults.length >= MOST_FAULTS) return;
     if (this.faults.some((noted) => noted.problem === fault.problem)) return;

@@ -1,4 +1,4 @@
-import { CLASS_OF, LETTER, LINE_END } from './bytes';
+import { CLASS_OF, CONTINUES_NUMBER, isLetter, LINE_END, POWERS_OF_TEN } from './bytes';
 import { MOST_WORDS, type LineWords } from './line-words';
 
 /** What one line in a thousand holds: kept out of the hot path so that it stays small. */
@@ -10,6 +10,8 @@ const LETTER_N = 13;
 
 /** Characters of a long text that a finding shows. */
 const SHOWN = 24;
+/** So many characters hold at most 15 digits and a point, which a double holds exactly. */
+const EXACT_DIGITS = 15;
 /** Words that steer the flow in macro dialects. */
 const FLOW_WORDS: readonly string[] = ['IF', 'WHILE', 'DO', 'END', 'GOTO', 'THEN', 'WEND'];
 
@@ -29,7 +31,7 @@ export function skipComment(line: LineWords, open: number): number {
       depth++;
     } else if (bytes[at] === 41 && --depth === 0) break;
   }
-  line.comments.push({ from: open + 1, to: at, isLine: false });
+  line.comment(open + 1, at, false);
   if (nested >= 0)
     line.fault({
       problem: 'nested-comment',
@@ -49,66 +51,112 @@ export function skipComment(line: LineWords, open: number): number {
   return depth === 0 ? at + 1 : at;
 }
 
-/** A number the hot path would not take: many digits, blanks inside, an exponent, or none at all. */
+/** A number that the hot path would not take: long, with blanks inside, with an exponent, or none at all. */
 export function readRestOfValue(line: LineWords, start: number, letter: number): number {
   const { bytes } = line;
   let at = start + 1;
-  let text = '';
-  let points = 0;
-  let digits = 0;
-  let inner = false;
-  let end = start + 1;
   while (isBlank(bytes[at]!)) at++;
-  if (bytes[at] === 43 || bytes[at] === 45) {
-    if (bytes[at] === 45) text = '-';
-    end = ++at;
+  const sign = bytes[at] === 45 ? '-' : '';
+  if (bytes[at] === 43 || bytes[at] === 45) at++;
+  while (isBlank(bytes[at]!)) at++;
+  const first = at;
+  const end = endOfNumber(line, at);
+  if (end < 0) return readValueless(line, start, letter, at);
+  at = end;
+  let text = '';
+  let isExact = true;
+  if (CONTINUES_NUMBER[bytes[at]!] === 1) {
+    const rest = noteContinuation(line, start, at);
+    if (rest > at) isExact = false;
+    text = bytes[at] === 46 || bytes[at] === 44 ? '' : line.text(at, rest);
+    at = rest;
   }
-  for (;;) {
-    const before = at;
-    while (isBlank(bytes[at]!)) at++;
+  const value =
+    isExact && end - first <= EXACT_DIGITS
+      ? exactValue(line, first, end, sign)
+      : Number(sign + withoutBlanks(line, first, end) + text);
+  noteOddities(line, { start, first, end, value });
+  putWord(line, letter, value, start, Math.max(end, text === '' ? end : at));
+  return at;
+}
+
+/** One past the last digit or point of the number at `at`, blanks inside it allowed; -1 without digits. */
+function endOfNumber(line: LineWords, at: number): number {
+  const { bytes } = line;
+  let end = -1;
+  let hasDigit = false;
+  let hasPoint = false;
+  for (; ; at++) {
     const byte = bytes[at]!;
-    if (isDigit(byte)) digits++;
-    else if (byte === POINT && points === 0) points++;
-    else break;
-    if (before !== at && text.length > 0 && text !== '-') inner = true;
-    text += String.fromCharCode(byte);
-    end = ++at;
+    if (isDigit(byte)) hasDigit = true;
+    else if (byte === POINT && !hasPoint) hasPoint = true;
+    else if (isBlank(byte)) continue;
+    else return hasDigit ? end : -1;
+    end = at + 1;
   }
-  if (digits === 0) return readValueless(line, start, letter, at);
-  const byte = bytes[at]!;
-  if ((byte === 69 || byte === 101) && at === end) {
-    const exponent = exponentAfter(line, at);
-    if (exponent !== '') {
-      at += exponent.length;
-      end = at;
-      text += exponent;
-      line.fault({
-        problem: 'unreadable-block',
-        from: start,
-        to: end,
-        facts: { reason: 'exponent', what: line.text(start, end) },
-        voids: false,
-      });
+}
+
+/** At most 15 digits, read as in the hot path but in doubles: mantissa and power of ten are both exact. */
+function exactValue(line: LineWords, first: number, end: number, sign: string): number {
+  const { bytes } = line;
+  let mantissa = 0;
+  let decimals = -1;
+  for (let at = first; at < end; at++) {
+    const byte = bytes[at]!;
+    if (byte === POINT) decimals = 0;
+    else if (isDigit(byte)) {
+      mantissa = mantissa * 10 + (byte - 48);
+      if (decimals >= 0) decimals++;
     }
-  } else if (byte === POINT || byte === 44) {
-    while (bytes[at] === POINT || bytes[at] === 44 || isDigit(bytes[at]!)) at++;
+  }
+  const value = decimals > 0 ? mantissa / POWERS_OF_TEN[decimals]! : mantissa;
+  return sign === '-' ? -value : value;
+}
+
+function withoutBlanks(line: LineWords, first: number, end: number): string {
+  let text = '';
+  for (let at = first; at < end; at++)
+    if (!isBlank(line.bytes[at]!)) text += String.fromCharCode(line.bytes[at]!);
+  return text;
+}
+
+/** What follows a number too closely: an exponent is read with it, a second point or a comma spoils it. */
+function noteContinuation(line: LineWords, start: number, at: number): number {
+  const { bytes } = line;
+  const byte = bytes[at]!;
+  if (byte === POINT || byte === 44) {
+    let to = at;
+    while (bytes[to] === POINT || bytes[to] === 44 || isDigit(bytes[to]!)) to++;
     line.fault({
       problem: 'unreadable-block',
       from: start,
-      to: at,
-      facts: { reason: byte === 44 ? 'comma' : 'two-points', what: line.text(start, at) },
+      to,
+      facts: { reason: byte === 44 ? 'comma' : 'two-points', what: line.text(start, to) },
       voids: true,
     });
+    return to;
   }
-  if (inner)
-    line.fault({
-      problem: 'odd-characters',
-      from: start,
-      to: end,
-      facts: { what: line.text(start, end), byte: SPACE },
-      voids: false,
-    });
-  const value = Number(text);
+  const exponent = exponentAfter(line, at);
+  if (exponent === '') return at;
+  const to = at + exponent.length;
+  line.fault({
+    problem: 'unreadable-block',
+    from: start,
+    to,
+    facts: { reason: 'exponent', what: line.text(start, to) },
+    voids: false,
+  });
+  return to;
+}
+
+interface OddNumber {
+  readonly start: number;
+  readonly first: number;
+  readonly end: number;
+  readonly value: number;
+}
+
+function noteOddities(line: LineWords, { start, first, end, value }: OddNumber): void {
   if (!Number.isFinite(value))
     line.fault({
       problem: 'unreadable-block',
@@ -117,8 +165,17 @@ export function readRestOfValue(line: LineWords, start: number, letter: number):
       facts: { reason: 'too-large', what: line.text(start, Math.min(end, start + SHOWN)) },
       voids: true,
     });
-  putWord(line, letter, value, start, end, points);
-  return at;
+  for (let at = first; at < end; at++)
+    if (isBlank(line.bytes[at]!)) {
+      line.fault({
+        problem: 'odd-characters',
+        from: start,
+        to: end,
+        facts: { what: line.text(start, Math.min(end, start + SHOWN)), byte: SPACE },
+        voids: false,
+      });
+      return;
+    }
 }
 
 function exponentAfter(line: LineWords, at: number): string {
@@ -130,21 +187,13 @@ function exponentAfter(line: LineWords, at: number): string {
   return to === from || to - from > 3 ? '' : line.text(at, to);
 }
 
-export function putWord(
-  line: LineWords,
-  letter: number,
-  value: number,
-  start: number,
-  end: number,
-  points: number,
-): void {
+function putWord(line: LineWords, letter: number, value: number, start: number, end: number): void {
   const { count } = line;
   if (count < MOST_WORDS) {
     line.letters[count] = letter;
     line.values[count] = value;
     line.starts[count] = start;
     line.ends[count] = end;
-    line.points[count] = points;
   }
   line.count = count + 1;
 }
@@ -153,7 +202,7 @@ export function putWord(
 function readValueless(line: LineWords, start: number, letter: number, at: number): number {
   const { bytes } = line;
   const byte = bytes[at]!;
-  if (byte === 35 || byte === 91 || (CLASS_OF[byte] === LETTER && isFunctionCall(line, at)))
+  if (byte === 35 || byte === 91 || (isLetter(byte) && isFunctionCall(line, at)))
     return skipComputed(line, start, at);
   const next = byte | 32;
   if ((next === 111 || next === 108) && (isDigit(bytes[at + 1]!) || isDigit(bytes[at - 1]!))) {
@@ -169,7 +218,7 @@ function readValueless(line: LineWords, start: number, letter: number, at: numbe
     return to;
   }
   let to = at;
-  if (to === start + 1) while (CLASS_OF[bytes[to]!] === LETTER) to++;
+  if (to === start + 1) while (isLetter(bytes[to]!)) to++;
   if (FLOW_WORDS.includes(line.text(start, Math.min(to, start + 5)).toUpperCase()))
     return skipFlow(line, start);
   line.fault({
@@ -188,7 +237,7 @@ function readValueless(line: LineWords, start: number, letter: number, at: numbe
 
 function isFunctionCall(line: LineWords, at: number): boolean {
   const from = at;
-  while (CLASS_OF[line.bytes[at]!] === LETTER) at++;
+  while (isLetter(line.bytes[at]!)) at++;
   return at - from >= 2 && line.bytes[at] === 91;
 }
 
@@ -206,8 +255,8 @@ function skipComputed(line: LineWords, start: number, from: number): number {
         break;
       }
     } else if (depth === 0 && byte !== 35 && at > from && !isDigit(byte)) {
-      if (CLASS_OF[byte] !== LETTER || !isFunctionCall(line, at)) break;
-      while (CLASS_OF[bytes[at + 1]!] === LETTER) at++;
+      if (!isLetter(byte) || !isFunctionCall(line, at)) break;
+      while (isLetter(bytes[at + 1]!)) at++;
     }
   }
   line.fault({
@@ -264,11 +313,12 @@ export function skipLabel(line: LineWords, start: number): number {
   const from = at;
   if (bytes[at] === 60) while (CLASS_OF[bytes[at]!] !== LINE_END && bytes[at - 1] !== 62) at++;
   else while (isDigit(bytes[at]!)) at++;
+  line.isRare = true;
   line.label = line.text(from, at) || line.text(start, start + 1);
   line.labelFrom = start;
   line.labelTo = at;
   while (isBlank(bytes[at]!)) at++;
-  const isPlainNumber = isDigit(bytes[from]!) && CLASS_OF[bytes[at]!] !== LETTER;
+  const isPlainNumber = isDigit(bytes[from]!) && !isLetter(bytes[at]!);
   return isPlainNumber && bytes[at] !== 91 ? at : skipFlow(line, start);
 }
 
