@@ -1,7 +1,8 @@
 import { LETTER } from '../blocks/block';
 import type { Motion } from './events';
 import { PLANES } from './machine';
-import { standAt, type Target } from './motions';
+import type { Circle, Target } from './kept';
+import { standAt } from './motions';
 import { refuse, tellProblem, type Run } from './run';
 
 const { I, J, K, R } = LETTER;
@@ -24,13 +25,6 @@ const CENTRES = [
   { u: K, v: I, other: J, ends: [LETTER.Z, LETTER.X] },
   { u: J, v: K, other: I, ends: [LETTER.Y, LETTER.Z] },
 ] as const;
-
-/** Centre in plane order and radius, machine mm. */
-export interface Circle {
-  u: number;
-  v: number;
-  radius: number;
-}
 
 /**
  * Carries out G2 (`turning` −1) or G3 (+1). Where the arc cannot be worked out that is told, and the walk
@@ -107,7 +101,7 @@ function findCircle(
   const hasCentre = block.has(letters.u) || block.has(letters.v);
   // Posts write the third centre word as nought on a helix; any other value is a slip of the plane.
   if (block.has(letters.other) && (run.dialect.isStrict || block.value(letters.other) !== 0)) {
-    const what = block.written(block.wordOf[letters.other]!);
+    const what = String.fromCharCode(65 + letters.other);
     refuse(run, 'arc-impossible', { letters: 'IJK' }, { reason: 'centre-letter', what, plane });
     return undefined;
   }

@@ -1,24 +1,11 @@
 import { LETTER } from '../blocks/block';
 import { codeName } from '../blocks/code-groups';
+import type { CycleMemory } from './kept';
 import { refuse, type Run } from './run';
 import { wholeNumber } from './whole-number';
 
 const { I, J, K, L, P, Q, R } = LETTER;
 
-/** What a canned cycle keeps from one block to the next: words in program units, levels in machine mm. */
-export interface CycleMemory {
-  /** The cycle the kept words belong to, in tenths; NO_CYCLE for none. */
-  code: number;
-  depth: number;
-  retract: number;
-  dwell: number;
-  peck: number;
-  shiftU: number;
-  shiftV: number;
-  back: number;
-  /** Height of the depth axis where the series of holes began. */
-  seriesLevel: number;
-}
 export const NO_CYCLE = 800;
 
 export function emptyCycle(): CycleMemory {

@@ -1,5 +1,6 @@
 import { LETTER } from '../blocks/block';
 import type { Motion } from './events';
+import type { Target } from './kept';
 import { tellProblem, type Run } from './run';
 
 const { X, Y, Z, A } = LETTER;
@@ -15,14 +16,6 @@ export const hasAxisWord = (seen: number): boolean => (seen & AXIS_BITS) !== 0;
 
 /** Bit 1 X, 2 Y, 4 Z, 8 A, from a block's letters. */
 export const namedAxes = (seen: number): number => ((seen >>> X) & 7) | ((seen & A_BIT) << 3);
-
-/** A point of the gauge point in machine mm, A in degrees. */
-export interface Target {
-  x: number;
-  y: number;
-  z: number;
-  a: number;
-}
 
 /** Every number starts as a fraction, so that the field is kept as a double from the first motion on. */
 export function emptyMotion(): Motion {

@@ -1,5 +1,6 @@
 import { codeName } from '../blocks/code-groups';
-import { moveStraight, type Target } from './motions';
+import type { Target } from './kept';
+import { moveStraight } from './motions';
 import { refuse, tellProblem, type Run } from './run';
 
 /** NISTIR 6556: a probing target lies at least this far away, mm (0.010 inch). */

@@ -2,13 +2,10 @@ import type { Block } from '../blocks/block';
 import type { BlockDialect } from '../blocks/parse-block';
 import type { DeclaredCode, Point, Setup } from '../shop/setup';
 import type { Shop } from '../shop/shop';
-import type { Circle } from './arcs';
 import type { Broadcaster } from './broadcaster';
-import type { CycleMemory } from './cycle-words';
 import type { Motion, Place, Problem, Words } from './events';
+import type { Circle, CycleMemory, SavedState, Target } from './kept';
 import type { Machine } from './machine';
-import type { Target } from './motions';
-import type { SavedState } from './saved-state';
 import type { WorkOffsets } from './work-offsets';
 
 /** What every part of the interpreter works on: one walk of one program over one machine. */

@@ -1,21 +1,6 @@
-import type { Machine } from './machine';
 import { placeProgramZero } from './program-zero';
 import type { Run } from './run';
 
-/** The modes that a save-state code keeps and a restore-state code brings back. */
-export type SavedState = Pick<
-  Machine,
-  | 'unit'
-  | 'planeIndex'
-  | 'isAbsolute'
-  | 'isArcCentreAbsolute'
-  | 'feedMode'
-  | 'path'
-  | 'returnTo'
-  | 'workOffset'
-  | 'speed'
-  | 'feed'
->;
 const MOST_SAVED = 32;
 
 export function saveState(run: Run): void {

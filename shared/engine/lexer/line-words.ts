@@ -1,4 +1,3 @@
-import type { Problem } from '../interpreter/events';
 import { decodeUtf8 } from './decode';
 
 /** Words a line may hold before it is no block at all; 26 letters and a handful of G and M words are usual. */
@@ -9,9 +8,21 @@ const MOST_FAULTS = 8;
 /** Comments of one line that are kept; nobody writes as many. */
 const MOST_COMMENTS = 200;
 
+/** What can be wrong with a line before anything of it is carried out; ids are those of the rules. */
+export type ReadingProblem =
+  | 'unreadable-block'
+  | 'not-modelled'
+  | 'repeated-word'
+  | 'out-of-range-word'
+  | 'nested-comment'
+  | 'modal-conflict'
+  | 'odd-characters'
+  | 'no-decimal-point'
+  | 'letter-for-digit';
+
 /** A fault of reading: which rule it is, the bytes that show it, and the figures for its sentence. */
 export interface Fault {
-  readonly problem: Problem;
+  readonly problem: ReadingProblem;
   readonly from: number;
   readonly to: number;
   readonly facts: Readonly<Record<string, string | number | boolean | null>>;
