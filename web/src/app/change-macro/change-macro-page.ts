@@ -31,7 +31,7 @@ import { PageHeader } from '../ui/page-header/page-header';
 import { RevisionList } from '../ui/revision-list/revision-list';
 import { SaveBar } from '../ui/save-bar/save-bar';
 import type { HoldsUnsaved } from '../ui/unsaved/unsaved-guard';
-import { keepLineEnds, linesOf, wordChangedLines } from './macro-text';
+import { keepLineEnds, linesOf, linesToRead, wordChangedLines } from './macro-text';
 
 interface Draft {
   readonly name: string;
@@ -103,7 +103,7 @@ export class ChangeMacroPage implements HoldsUnsaved {
     const error = this.details.error();
     return error ? toProblemError(error) : null;
   });
-  protected readonly lines = computed(() => linesOf(this.machine()?.macro?.text ?? ''));
+  protected readonly lines = computed(() => linesToRead(this.machine()?.macro?.text ?? ''));
   protected readonly lineCount = computed(() => counted(this.lines().length, 'line'));
   protected readonly walks = computed(() => this.machine()?.controller.toolChange === 'macro');
   protected readonly typedLines = computed(() => linesOf(this.draft()?.text ?? '').length);

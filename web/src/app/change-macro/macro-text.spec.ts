@@ -1,8 +1,13 @@
-import { changedLines, keepLineEnds, linesOf, wordChangedLines } from './macro-text';
+import { changedLines, keepLineEnds, linesOf, linesToRead, wordChangedLines } from './macro-text';
 
 describe('the text of a macro', () => {
   it('has lines that end with LF, CRLF or a lone CR', () => {
     expect(linesOf('M5\r\nG53 G0 Z0\rM30\n')).toEqual(['M5', 'G53 G0 Z0', 'M30', '']);
+  });
+  it('has no line after its last line end when it is read', () => {
+    expect(linesToRead('M5\nM30\n')).toEqual(['M5', 'M30']);
+    expect(linesToRead('M5\nM30')).toEqual(['M5', 'M30']);
+    expect(linesToRead('')).toEqual([]);
   });
   it('keeps its line ends through a text area that only knows LF', () => {
     expect(keepLineEnds('M5\nM30\n', 'M5\r\nM9\r\n')).toBe('M5\r\nM30\r\n');

@@ -3,6 +3,12 @@ export function linesOf(text: string): readonly string[] {
   return text.split(/\r\n|\r|\n/);
 }
 
+/** Lines to read: what follows the last line end is a line only if something stands there. */
+export function linesToRead(text: string): readonly string[] {
+  const lines = linesOf(text);
+  return lines.at(-1) === '' ? lines.slice(0, -1) : lines;
+}
+
 /**
  * What was typed, with the line ends the macro had: a text area only knows LF, and a controller may
  * only know CRLF. A text whose ends are mixed keeps the kind of its first line.

@@ -229,6 +229,18 @@ const CODES: FactSection = {
       start: { code: '', does: 'nothing' },
       fields: [
         { type: 'text', key: 'code', label: 'Code', mono: true, help: 'Like M64 or G38.2.' },
+        {
+          type: 'map',
+          key: 'where',
+          label: 'Only where',
+          help: 'Words of the block that must have these values, such as P = 2.',
+          optional: true,
+          entry: 'word',
+          keyLabel: 'Letter',
+          keyExample: 'P',
+          value: figure('value', 'Value', 'plain'),
+          start: undefined,
+        },
         { type: 'choice', key: 'does', label: 'Does', choices: spelt(CODE_DEEDS) },
         maybe({
           type: 'choice',
@@ -267,18 +279,6 @@ const CODES: FactSection = {
           optional: true,
           help: 'For set current tool: the letter that carries it.',
         },
-        {
-          type: 'map',
-          key: 'where',
-          label: 'Only where',
-          help: 'Words of the block that must have these values, such as P = 2.',
-          optional: true,
-          entry: 'word',
-          keyLabel: 'Letter',
-          keyExample: 'P',
-          value: figure('value', 'Value', 'plain'),
-          start: undefined,
-        },
       ],
     },
     {
@@ -306,6 +306,7 @@ const SWITCHES: FactSection = {
       type: 'group',
       key: 'switches',
       label: 'Behaviour',
+      unlabelled: true,
       fields: [
         choice('homeAxes', 'G28 with axis words', 'Which axes go home.', {
           all: 'all axes',

@@ -5,6 +5,11 @@ import { figure, length, maybe, perAxis, point } from '../ui/facts/fact-field';
 const interval = (key: string, label: string, quantity: 'length' | 'degrees' = 'length') =>
   ({ type: 'interval', key, label, quantity }) as const;
 
+const wider = (key: string, label: string) => ({
+  ...maybe(interval(key, label)),
+  presence: 'has wider limits',
+});
+
 const TRAVEL: FactSection = {
   title: 'Travel',
   help: 'What the controller enforces. All places here are machine coordinates of the spindle nose: jog to a stop, read the display.',
@@ -18,7 +23,7 @@ const TRAVEL: FactSection = {
         interval('x', 'X, left to right'),
         interval('y', 'Y, front to back'),
         interval('z', 'Z, low to high'),
-        maybe(interval('a', 'A, fourth axis', 'degrees')),
+        { ...maybe(interval('a', 'A, fourth axis', 'degrees')), presence: 'it has one' },
       ],
     },
     {
@@ -27,9 +32,9 @@ const TRAVEL: FactSection = {
       label: 'Wider limits during a tool change only',
       help: 'Fill in an axis only if the controller lets a change go further than a program may.',
       fields: [
-        maybe(interval('x', 'X in a change')),
-        maybe(interval('y', 'Y in a change')),
-        maybe(interval('z', 'Z in a change')),
+        wider('x', 'X in a change'),
+        wider('y', 'Y in a change'),
+        wider('z', 'Z in a change'),
       ],
     },
     maybe(
@@ -108,6 +113,7 @@ const SPINDLE: FactSection = {
       key: 'drawbar',
       label: 'Power drawbar',
       optional: true,
+      presence: 'it has one',
       start: { open: 1, close: 1, ejects: 0 },
       help: 'How long it takes to act; leave unticked on a machine without one.',
       fields: [
@@ -127,6 +133,7 @@ const TABLE: FactSection = {
       key: 'spoilboard',
       label: 'Spoilboard',
       optional: true,
+      presence: 'it has one',
       start: { top: 0, allowance: 0 },
       help: 'Enter its height again after each resurfacing: a cut into the table is judged by it.',
       fields: [
@@ -141,6 +148,7 @@ const TABLE: FactSection = {
           key: 'area',
           label: 'Its area',
           optional: true,
+          presence: 'stated; else it covers all the travel',
           start: { min: { x: 0, y: 0 }, max: { x: 0, y: 0 } },
           fields: [corner('min', 'Front left corner'), corner('max', 'Back right corner')],
         },

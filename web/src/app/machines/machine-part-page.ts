@@ -4,6 +4,7 @@ import {
   computed,
   inject,
   input,
+  signal,
   viewChild,
 } from '@angular/core';
 import { rxResource } from '@angular/core/rxjs-interop';
@@ -70,12 +71,12 @@ export class MachinePartPage implements HoldsUnsaved {
     this.#toolList.hasValue() ? this.#toolList.value().map((record) => record.tool) : [],
   );
 
-  readonly #live = computed(() => this.facts()?.live() ?? this.standing()?.value);
+  protected readonly typed = signal<unknown>(null);
   /** The drawing follows what is typed as long as it can be drawn, else it shows what stands. */
   protected readonly drawn = computed(() => {
     const machine = this.page.machine();
     if (!machine || this.part() === 'controller') return null;
-    const typed = this.#live();
+    const typed = this.typed();
     return {
       machine:
         this.part() === 'description'

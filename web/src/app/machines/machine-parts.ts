@@ -29,6 +29,18 @@ export interface MachinePart {
   ) => Observable<MachineDetails>;
 }
 
+/** The whole setup refuses a pocket number that stands twice; a rack by itself must, too. */
+const rackWithoutTwins = rackSchema.superRefine(({ pockets }, context) => {
+  const numbers = pockets.map((pocket) => pocket.number);
+  numbers.forEach((number, index) => {
+    if (numbers.indexOf(number) === index) return;
+    context.addIssue({
+      code: 'custom',
+      path: ['pockets', index, 'number'],
+      message: `pocket ${number} stands here twice`,
+    });
+  });
+});
 const workSchema = offsetsSchema.pick({ work: true });
 
 export const MACHINE_PARTS: Readonly<Record<PartName, MachinePart>> = {
@@ -71,7 +83,7 @@ export const MACHINE_PARTS: Readonly<Record<PartName, MachinePart>> = {
     may: 'change-rack',
     revisionsOf: 'rack',
     standing: ({ rack, rackRevision }) => ({ value: { ...rack }, revision: rackRevision }),
-    validate: (value) => rackSchema.safeParse(value),
+    validate: (value) => rackWithoutTwins.safeParse(value),
     save: (client, { id }, { value, basedOn, reason }) =>
       client.saveRack(id, { basedOn, reason, rack: rackSchema.parse(value) }),
   },

@@ -1,5 +1,7 @@
-import type { FactSection } from '../ui/facts/fact-field';
+import type { FactSection, FigureField } from '../ui/facts/fact-field';
 import { figure, length, maybe } from '../ui/facts/fact-field';
+
+const axis = (field: FigureField) => ({ ...maybe(field), empty: 'not set' });
 
 /** The work-offset table of one machine, wrapped under `work` so that it has a field of its own. */
 export const OFFSET_SECTIONS: readonly FactSection[] = [
@@ -11,6 +13,7 @@ export const OFFSET_SECTIONS: readonly FactSection[] = [
         type: 'map',
         key: 'work',
         label: 'Offsets',
+        unlabelled: true,
         entry: 'offset',
         keyLabel: 'Offset',
         keyExample: 'G54',
@@ -20,10 +23,10 @@ export const OFFSET_SECTIONS: readonly FactSection[] = [
           label: '',
           inline: true,
           fields: [
-            maybe(length('x', 'X')),
-            maybe(length('y', 'Y')),
-            maybe(length('z', 'Z')),
-            maybe(figure('a', 'A', 'degrees')),
+            axis(length('x', 'X')),
+            axis(length('y', 'Y')),
+            axis(length('z', 'Z')),
+            axis(figure('a', 'A', 'degrees')),
           ],
         },
         start: {},

@@ -60,6 +60,7 @@ const POCKET_FIELDS: readonly FactField[] = [
     key: 'taught',
     label: 'Taught',
     optional: true,
+    presence: 'taught at the machine',
     start: { at: '', by: '' },
     fields: [
       { type: 'moment', key: 'at', label: 'When' },
@@ -72,6 +73,7 @@ export const POCKETS: ListField = {
   type: 'list',
   key: 'pockets',
   label: 'Pockets',
+  unlabelled: true,
   entry: 'pocket',
   namedBy: 'number',
   fields: POCKET_FIELDS,

@@ -8,7 +8,7 @@ import { drawTool } from '../ui/rack-strip/draw-tool';
 const TALL = 340;
 const WIDE = 200;
 /** Room beside the tool for the dimension lines and their figures. */
-const MARGIN = 78;
+const MARGIN = 96;
 
 /** A tool in its holder to scale, hanging from the gauge line, with the lengths a check rests on. */
 @Component({

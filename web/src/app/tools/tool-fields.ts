@@ -70,6 +70,7 @@ const LENGTHS: FactSection = {
       key: 'measured',
       label: 'Measured',
       optional: true,
+      presence: 'the gauge length was measured',
       absent: null,
       start: { at: '', method: '' },
       fields: [
@@ -94,7 +95,8 @@ const HOLDER: FactSection = {
     {
       type: 'group',
       key: 'holder',
-      label: '',
+      label: 'Holder',
+      unlabelled: true,
       fields: [
         {
           type: 'text',
@@ -111,6 +113,7 @@ const HOLDER: FactSection = {
           key: 'collet',
           label: 'Collet',
           optional: true,
+          presence: 'it holds by a collet',
           start: {},
           help: 'What the collet may clamp. A collet closes about 0.5 to 1 mm and never opens past its nominal size.',
           fields: [
@@ -136,8 +139,8 @@ const HOLDER: FactSection = {
 const LIFE: FactSection = {
   title: 'Life',
   fields: [
-    maybe(figure('life', 'Life', 'seconds', 'Cutting time until it is changed or sharpened.')),
-    figure('used', 'Used', 'seconds', 'Cutting time since it was new or sharpened.'),
+    maybe(figure('life', 'Life', 'lifetime', 'Cutting time until it is changed or sharpened.')),
+    figure('used', 'Used', 'lifetime', 'Cutting time since it was new or sharpened.'),
     maybe(figure('mass', 'Mass with holder', 'mass', 'For pockets with a weight limit.')),
     {
       ...maybe(

@@ -5,6 +5,7 @@ import {
   inject,
   input,
   linkedSignal,
+  signal,
   viewChild,
 } from '@angular/core';
 import { rxResource } from '@angular/core/rxjs-interop';
@@ -95,9 +96,10 @@ export class ToolPage implements HoldsUnsaved {
     const tool = this.record()?.tool;
     return tool ? `T${tool.number} ${tool.name}` : 'A new tool';
   });
+  protected readonly said = signal<Readonly<Record<string, unknown>> | null>(null);
   /** The tool as typed at this moment, once enough of it is there to be drawn. */
   protected readonly drawn = computed(() => {
-    const facts = this.facts()?.live();
+    const facts = this.said();
     const typed = facts ? toolSchema.safeParse(toolPartOf(facts)) : undefined;
     return typed?.success ? typed.data : (this.record()?.tool ?? null);
   });

@@ -45,18 +45,26 @@ export class FactEditor {
   protected readonly matcher: ErrorStateMatcher = {
     isErrorState: () => this.node().wrong() !== null,
   };
-  protected readonly shape = computed(() => {
-    const node = this.node();
-    if (node.kind === 'group' && node.field.inline) return 'middle';
-    if (node.kind === 'group' || node.kind === 'list' || node.kind === 'map') return 'wide';
-    return node.kind === 'interval' || node.kind === 'box' ? 'middle' : 'narrow';
-  });
   protected readonly help = computed(() => (this.quiet() ? undefined : this.node().field.help));
+  protected readonly label = computed(() => {
+    const { field } = this.node();
+    const meansEmpty = field.type === 'figure' && field.empty !== undefined;
+    return field.optional && !meansEmpty ? `${field.label} (if any)` : field.label;
+  });
   protected readonly suffix = computed(() => {
     const { field } = this.node();
     return field.type === 'figure' ? suffixOf(field.quantity, this.form().making.units) : '';
   });
 
+  /** How much room it takes; a group that is not stated is only its box to tick. */
+  protected shape(): 'narrow' | 'middle' | 'wide' {
+    const node = this.node();
+    if (node.kind === 'list' || node.kind === 'map') return 'wide';
+    if (node.kind === 'interval' || node.kind === 'box') return 'middle';
+    if (node.kind !== 'group') return 'narrow';
+    if (node.field.inline) return 'middle';
+    return node.present.value ? 'wide' : 'narrow';
+  }
   protected entryName(list: ListNode, entry: GroupNode, index: number): string {
     const named = entry.children.find((each) => each.field.key === list.field.namedBy);
     const name: unknown = named?.control.value;

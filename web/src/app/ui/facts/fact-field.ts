@@ -13,12 +13,16 @@ interface Named {
   /** May be left out; `absent` says which value the contract wants then. */
   readonly optional?: boolean;
   readonly absent?: null;
+  /** Whether the heading above says the name already; then it is only spoken. */
+  readonly unlabelled?: boolean;
 }
 export interface FigureField extends Named {
   readonly type: 'figure';
   readonly quantity: Quantity;
   /** Letters that may stand instead of a number (a word of the block that carries it). */
   readonly orLetter?: boolean;
+  /** Said in an empty field, where empty has a meaning of its own: "open", "not set". */
+  readonly empty?: string;
 }
 export interface TextField extends Named {
   readonly type: 'text';
@@ -49,6 +53,8 @@ export interface MomentField extends Named {
 /** From … to, stored as a pair. */
 export interface IntervalField extends Named {
   readonly type: 'interval';
+  /** Beside the box that says it exists: "has its own limits". */
+  readonly presence?: string;
   readonly quantity: Quantity;
 }
 /** A box of which any side may be open. */
@@ -58,6 +64,8 @@ export interface BoxField extends Named {
 export interface GroupField extends Named {
   readonly type: 'group';
   readonly fields: readonly FactField[];
+  /** Beside the box that says it exists: "it has one". */
+  readonly presence?: string;
   /** What an optional group starts from when a person says that it exists. */
   readonly start?: unknown;
   /** Short figures that stand side by side and read as one line (X, Y, Z). */

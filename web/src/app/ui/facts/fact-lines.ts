@@ -16,6 +16,7 @@ export type FactLine =
       readonly kind: 'group';
       readonly key: string;
       readonly label: string;
+      readonly unlabelled: boolean;
       readonly fields: readonly FactField[];
       readonly value: unknown;
     }
@@ -23,10 +24,15 @@ export type FactLine =
       readonly kind: 'table';
       readonly key: string;
       readonly label: string;
-      readonly columns: readonly string[];
+      readonly unlabelled: boolean;
+      readonly columns: readonly Column[];
       readonly rows: readonly (readonly string[])[];
     };
 
+interface Column {
+  readonly label: string;
+  readonly isFigure: boolean;
+}
 interface Reader {
   readonly units: Units;
   readonly now: Date;
@@ -47,32 +53,36 @@ export function layOutFacts(
 }
 
 function layOut(field: FactField, fact: unknown, reader: Reader): FactLine {
-  const { key, label } = field;
+  const { key, label, unlabelled = false } = field;
   if (field.type === 'group' && !field.inline && isRecord(fact)) {
-    return { kind: 'group', key, label, fields: field.fields, value: fact };
+    return { kind: 'group', key, label, unlabelled, fields: field.fields, value: fact };
   }
   if (field.type === 'list') {
     const entries: readonly unknown[] = Array.isArray(fact) ? fact : [];
-    return { kind: 'table', key, label, ...tableOf(field.fields, entries, reader) };
+    return { kind: 'table', key, label, unlabelled, ...tableOf(field.fields, entries, reader) };
   }
   if (field.type === 'map') {
     const entries = Object.entries(isRecord(fact) ? fact : {});
     const rows = entries.map(([name, each]) => [name, wordCell(field.value, each, reader)]);
-    return { kind: 'table', key, label, columns: [field.keyLabel, field.value.label], rows };
+    const columns = [
+      { label: field.keyLabel, isFigure: true },
+      { label: field.value.label, isFigure: true },
+    ];
+    return { kind: 'table', key, label, unlabelled, columns, rows };
   }
   const words = wordFact(field, fact, reader.units, reader.now);
-  const isFigure = field.type === 'figure' || field.type === 'interval' || field.type === 'box';
-  return { kind: 'words', key, label, words, unsaid: words === NOT_SAID, isFigure };
+  const unsaid = words === NOT_SAID;
+  return { kind: 'words', key, label, words, unsaid, isFigure: isOfFigures(field) };
 }
 
 function tableOf(
   fields: readonly FactField[],
   entries: readonly unknown[],
   reader: Reader,
-): { columns: readonly string[]; rows: readonly (readonly string[])[] } {
+): { columns: readonly Column[]; rows: readonly (readonly string[])[] } {
   const used = fields.filter((field) => entries.some((each) => !isUnsaid(part(each, field.key))));
   return {
-    columns: used.map((field) => field.label),
+    columns: used.map((field) => ({ label: field.label, isFigure: isOfFigures(field) })),
     rows: entries.map((each) =>
       used.map((field) => wordCell(field, part(each, field.key), reader)),
     ),
@@ -93,6 +103,11 @@ function wordCell(field: FactField, fact: unknown, reader: Reader): string {
       .join(', ');
   }
   return wordFact(field, fact, reader.units, reader.now);
+}
+
+function isOfFigures(field: FactField): boolean {
+  if (field.type === 'group') return field.inline === true;
+  return ['figure', 'interval', 'box', 'map'].includes(field.type);
 }
 
 function isUnsaid(fact: unknown): boolean {

@@ -228,7 +228,11 @@ function makeBox(field: BoxField, value: unknown, making: FormMaking): BoxNode {
   const sides = (['min', 'max'] as const).flatMap((side) =>
     (['x', 'y', 'z'] as const).map((axis) => {
       const label = `${axis.toUpperCase()} ${side === 'min' ? 'from' : 'to'}`;
-      const sideField: FigureField = { ...figure(axis, label, 'length'), optional: true };
+      const sideField: FigureField = {
+        ...figure(axis, label, 'length'),
+        optional: true,
+        empty: 'open',
+      };
       const node = makeFigure(sideField, part(part(value, side), axis), making);
       control.addControl(`${side} ${axis}`, node.control);
       return { side, axis, node };

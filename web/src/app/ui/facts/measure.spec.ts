@@ -32,6 +32,14 @@ describe('figures as a person types them', () => {
     expect(readFigure('2.5', 'seconds', 'inch')).toEqual({ stored: 2.5 });
   });
 
+  it('reads a life in minutes, or in the unit behind it, as seconds', () => {
+    expect(readFigure('90', 'lifetime', 'mm')).toEqual({ stored: 5400 });
+    expect(readFigure('1.5 h', 'lifetime', 'inch')).toEqual({ stored: 5400 });
+    expect(readFigure('5400s', 'lifetime', 'mm')).toEqual({ stored: 5400 });
+    expect(showFigure(5400, 'lifetime', 'mm')).toBe('90');
+    expect(wordFigure(5400, 'lifetime', 'mm')).toBe('1 h 30 min');
+  });
+
   it('refuses a comma that could be a decimal mark or a thousands mark', () => {
     expect(readFigure('1,219', 'length', 'mm')).toEqual({
       sentence: '“1,219” could be read two ways. Write 1.219 or 1219.',

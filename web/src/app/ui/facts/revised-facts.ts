@@ -4,6 +4,7 @@ import {
   Component,
   computed,
   contentChildren,
+  effect,
   input,
   linkedSignal,
   output,
@@ -89,6 +90,8 @@ export class RevisedFacts {
   /** Something new: opens as a form, and there is nothing to read yet. */
   readonly isNew = input(false);
   readonly kept = output<Standing>();
+  /** What the facts say at this moment, with every change; for a drawing beside the form. */
+  readonly said = output<Facts>();
 
   private readonly extras = contentChildren(SectionExtra);
 
@@ -114,7 +117,7 @@ export class RevisedFacts {
     ),
   );
   /** What the facts are at this moment: as typed while they are changed, else as they stand. */
-  readonly live = computed<Facts>(() => {
+  protected readonly live = computed<Facts>(() => {
     this.#typed();
     const form = this.form();
     return form ? readFactForm(form).value : this.standing().value;
@@ -139,6 +142,10 @@ export class RevisedFacts {
     };
   });
   readonly #fields = computed(() => fieldsOf(this.sections()));
+
+  constructor() {
+    effect(() => this.said.emit(this.live()));
+  }
 
   /** Whether leaving now would lose something typed. */
   hasUnsaved(): boolean {
