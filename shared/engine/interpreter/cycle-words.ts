@@ -18,6 +18,7 @@ export function emptyCycle(): CycleMemory {
     shiftU: NaN,
     shiftV: NaN,
     back: NaN,
+    motionBefore: NO_CYCLE,
     seriesLevel: NaN,
   };
 }
@@ -43,8 +44,8 @@ export function readCycleWords(run: Run, code: number, level: number): number {
   const { cycle } = run;
   if (cycle.code !== code) {
     if (cycle.code === NO_CYCLE) cycle.seriesLevel = level;
-    const { seriesLevel } = cycle;
-    Object.assign(cycle, emptyCycle(), { seriesLevel });
+    const { seriesLevel, motionBefore } = cycle;
+    Object.assign(cycle, emptyCycle(), { seriesLevel, motionBefore });
   }
   const missing = takeWords(run, code);
   if (missing !== '') {

@@ -121,10 +121,20 @@ function carryOutMotion(run: Run): void {
 
 function setMotionMode(run: Run, code: number, group: number): void {
   const { block, machine, cycle } = run;
+  const wasCycle = isCycle(machine.motionCode);
+  // A macro dialect keeps cycles in a group of their own: G80 gives back the motion code from before them
+  // (common practice, no source). In the published language G80 leaves none in force.
+  const isOwnGroup = run.controller.language === 'custom-macro' && !run.dialect.isStrict;
+  if (code === NO_CYCLE && isOwnGroup) {
+    if (!wasCycle) return;
+    code = cycle.motionBefore;
+  }
   if (machine.motionCode === code) return;
+  if (isCycle(code)) {
+    if (!wasCycle) cycle.motionBefore = machine.motionCode;
+  } else cycle.code = NO_CYCLE;
   machine.motionCode = code;
   machine.noteSet(SETTING.motionMode, block.codeWords[group]!);
-  if (!isCycle(code)) cycle.code = NO_CYCLE;
 }
 
 /** A block of axis words alone behind a lone G53 or G28: the move was meant in machine coordinates. */

@@ -28,6 +28,8 @@ export interface CycleMemory {
   shiftU: number;
   shiftV: number;
   back: number;
+  /** The motion code in force before the series. */
+  motionBefore: number;
   /** Height of the depth axis where the series of holes began. */
   seriesLevel: number;
 }

@@ -10,6 +10,11 @@ const LETTER_N = 13;
 
 /** Characters of a long text that a finding shows. */
 const SHOWN = 24;
+/**
+ * No word of any machine is larger: a thousand kilometres in millimetres. Up to here sums and squares of
+ * coordinates stay far from where doubles end.
+ */
+const LARGEST = 1e9;
 /** So many characters hold at most 15 digits and a point, which a double holds exactly. */
 const EXACT_DIGITS = 15;
 /** Words that steer the flow in macro dialects. */
@@ -75,7 +80,7 @@ export function readRestOfValue(line: LineWords, start: number, letter: number):
     isExact && end - first <= EXACT_DIGITS
       ? exactValue(line, first, end, sign)
       : Number(sign + withoutBlanks(line, first, end) + text);
-  noteOddities(line, { start, first, end, value });
+  noteOddities(line, { letter, start, first, end, value });
   putWord(line, letter, value, start, Math.max(end, text === '' ? end : at));
   return at;
 }
@@ -150,14 +155,15 @@ function noteContinuation(line: LineWords, start: number, at: number): number {
 }
 
 interface OddNumber {
+  readonly letter: number;
   readonly start: number;
   readonly first: number;
   readonly end: number;
   readonly value: number;
 }
 
-function noteOddities(line: LineWords, { start, first, end, value }: OddNumber): void {
-  if (!Number.isFinite(value))
+function noteOddities(line: LineWords, { letter, start, first, end, value }: OddNumber): void {
+  if (!(Math.abs(value) <= LARGEST) && letter !== LETTER_N)
     line.fault({
       problem: 'unreadable-block',
       from: start,

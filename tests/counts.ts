@@ -1,0 +1,24 @@
+/**
+ * How much of every long suite runs: a slice with a fixed seed in `npm test`, all of it in
+ * `npm run test:long`, which sets NIGHTLATCH_LONG=1. Every such number stands here.
+ */
+export const IS_LONG = process.env['NIGHTLATCH_LONG'] === '1';
+/** The same programs on every run; a failure names the case, not the day. */
+export const SEED = 20_260_115;
+
+const of = (slice: number, long: number): number => (IS_LONG ? long : slice);
+
+export const COUNTS = {
+  /** Programs a property test makes. */
+  properties: of(150, 5_000),
+  /** Decimals compared with parseFloat, bit by bit. */
+  numbers: of(60_000, 2_000_000),
+  /** Random arcs compared with their own sampling. */
+  arcs: of(300, 20_000),
+  /** Plain programs whose words are compared with those of gcode-parser. */
+  tokenPrograms: of(60, 3_000),
+  /** Mutated programs that must neither crash nor hang. */
+  fuzz: of(400, 50_000),
+  /** Random byte strings pushed as they are. */
+  garbage: of(300, 20_000),
+} as const;
