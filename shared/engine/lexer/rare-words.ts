@@ -18,6 +18,7 @@ const LARGEST = 1e9;
 /** So many characters hold at most 15 digits and a point, which a double holds exactly. */
 const EXACT_DIGITS = 15;
 /** Words that steer the flow in macro dialects. */
+const LONGEST_FLOW_WORD = 6;
 const FLOW_WORDS: readonly string[] = ['IF', 'WHILE', 'DO', 'END', 'GOTO', 'THEN', 'WEND'];
 
 const isDigit = (byte: number): boolean => 48 <= byte && byte <= 57;
@@ -204,41 +205,64 @@ function putWord(line: LineWords, letter: number, value: number, start: number, 
   line.count = count + 1;
 }
 
-/** A letter with no number behind it: a computed value, a letter for a digit, or simply nothing. */
+/** A letter with no number behind it: a computed value, a letter for a digit, text, or simply nothing. */
 function readValueless(line: LineWords, start: number, letter: number, at: number): number {
   const { bytes } = line;
   const byte = bytes[at]!;
+  const textEnd = endOfText(line, start);
+  if (
+    FLOW_WORDS.includes(
+      line.text(start, Math.min(textEnd, start + LONGEST_FLOW_WORD)).toUpperCase(),
+    )
+  )
+    return skipFlow(line, start);
   if (byte === 35 || byte === 91 || (isLetter(byte) && isFunctionCall(line, at)))
     return skipComputed(line, start, at);
-  const next = byte | 32;
-  if ((next === 111 || next === 108) && (isDigit(bytes[at + 1]!) || isDigit(bytes[at - 1]!))) {
-    let to = at;
-    while (isDigit(bytes[to]!) || (bytes[to]! | 32) === 111 || (bytes[to]! | 32) === 108) to++;
-    line.fault({
-      problem: 'letter-for-digit',
-      from: start,
-      to,
-      facts: { what: line.text(start, to), letter: String.fromCharCode(byte) },
-      voids: true,
-    });
-    return to;
-  }
-  let to = at;
-  if (to === start + 1) while (isLetter(bytes[to]!)) to++;
-  if (FLOW_WORDS.includes(line.text(start, Math.min(to, start + 5)).toUpperCase()))
-    return skipFlow(line, start);
+  if (isDigitLike(byte) && (isDigit(bytes[at + 1]!) || isDigit(bytes[at - 1]!)))
+    return readLetterForDigit(line, start, at);
+  const isText = textEnd > start + 1;
+  const to = isText ? textEnd : Math.max(at, start + 1);
   line.fault({
     problem: 'unreadable-block',
     from: start,
-    to: Math.max(to, start + 1),
+    to: isText ? to : endWithoutBlanks(line, to),
     facts: {
-      reason: to > start + 1 && to !== at ? 'text' : 'no-number',
-      what: line.text(start, Math.max(to, start + 1)),
+      reason: isText ? 'text' : 'no-number',
+      what: line.text(start, Math.min(to, start + SHOWN)).trimEnd(),
       letter: String.fromCharCode(65 + letter),
     },
     voids: true,
   });
-  return Math.max(to, start + 1);
+  return to;
+}
+
+/** One past the letters that stand together from `start` on. */
+function endOfText(line: LineWords, start: number): number {
+  let to = start + 1;
+  while (isLetter(line.bytes[to]!)) to++;
+  return to;
+}
+
+function endWithoutBlanks(line: LineWords, to: number): number {
+  while (isBlank(line.bytes[to - 1]!)) to--;
+  return to;
+}
+
+/** O and l, in either case, pass for a nought and a one. */
+const isDigitLike = (byte: number): boolean => (byte | 32) === 111 || (byte | 32) === 108;
+
+function readLetterForDigit(line: LineWords, start: number, at: number): number {
+  const { bytes } = line;
+  let to = at;
+  while (isDigit(bytes[to]!) || isDigitLike(bytes[to]!)) to++;
+  line.fault({
+    problem: 'letter-for-digit',
+    from: start,
+    to,
+    facts: { what: line.text(start, to), letter: line.text(at, at + 1) },
+    voids: true,
+  });
+  return to;
 }
 
 function isFunctionCall(line: LineWords, at: number): boolean {
