@@ -25,6 +25,7 @@ import { MachineClient } from '../machines/machine-client';
 import { CurrentUser } from '../sign-in/current-user';
 import { ConflictNotice } from '../ui/conflict-notice/conflict-notice';
 import { counted } from '../ui/count';
+import { IntoView } from '../ui/into-view/into-view';
 import { MachineTabs } from '../ui/machine-tabs/machine-tabs';
 import { Notice } from '../ui/notice/notice';
 import { PageHeader } from '../ui/page-header/page-header';
@@ -44,6 +45,7 @@ interface Draft {
   imports: [
     ConflictNotice,
     FormsModule,
+    IntoView,
     MachineTabs,
     MatButton,
     MatFormField,

@@ -196,7 +196,7 @@ const PARAMETERS: FactSection = {
       key: 'pocketContents',
       label: 'Contents of each pocket',
       help: 'The parameter that tells which tool sits in a pocket.',
-      entry: 'pocket',
+      entry: 'pocket’s parameter',
       keyLabel: 'Pocket',
       keyExample: '1',
       value: { type: 'text', key: 'value', label: 'Parameter', mono: true },

@@ -20,7 +20,8 @@ export const OFFSET_SECTIONS: readonly FactSection[] = [
         value: {
           type: 'group',
           key: 'value',
-          label: '',
+          label: 'Place of work zero',
+          unlabelled: true,
           inline: true,
           fields: [
             axis(length('x', 'X')),

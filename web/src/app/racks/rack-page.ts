@@ -23,6 +23,7 @@ import { MachineClient } from '../machines/machine-client';
 import { CurrentUser } from '../sign-in/current-user';
 import { ToolClient } from '../tools/tool-client';
 import { ConflictNotice } from '../ui/conflict-notice/conflict-notice';
+import { IntoView } from '../ui/into-view/into-view';
 import { MachineTabs } from '../ui/machine-tabs/machine-tabs';
 import { MomentPipe } from '../ui/moment-pipe';
 import { Notice } from '../ui/notice/notice';
@@ -48,6 +49,7 @@ import { offerTools } from './tool-offers';
   selector: 'nl-rack-page',
   imports: [
     ConflictNotice,
+    IntoView,
     LoadingHistory,
     MachineTabs,
     MatButton,

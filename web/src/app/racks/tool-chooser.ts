@@ -11,6 +11,7 @@ import {
 } from '@angular/material/dialog';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
+import { IntoView } from '../ui/into-view/into-view';
 import { SeverityMark } from '../ui/severity-mark/severity-mark';
 import type { ToolOffer } from './tool-offers';
 import { searchOffers } from './tool-offers';
@@ -28,6 +29,7 @@ export interface ToolChoice {
   selector: 'nl-tool-chooser',
   imports: [
     FormsModule,
+    IntoView,
     MatButton,
     MatDialogActions,
     MatDialogClose,

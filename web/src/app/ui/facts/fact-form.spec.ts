@@ -171,7 +171,7 @@ describe('what a schema refused', () => {
     expect(refused({})[1]?.sentence).toBe('This is missing; a number is expected.');
   });
 
-  it('is marked at the deepest field that stands for its path, and wiped by the next marking', () => {
+  it('is marked at the deepest field of its path, told in the form’s order, and wiped by the next marking', () => {
     const form = openFactForm(FIELDS, VALUE, 'mm');
     const marked = markWrong(form, [
       { path: ['steps', 1, 'length'], sentence: 'Must be greater than 0.' },
@@ -180,9 +180,9 @@ describe('what a schema refused', () => {
       { path: ['nowhere'], sentence: 'Lost.' },
     ]);
     expect(marked.map((each) => each.place)).toEqual([
-      'Steps, step 2, Length',
       'Travel, to',
       'Box, X to',
+      'Steps, step 2, Length',
       'nowhere',
     ]);
     expect(marked[3]?.fieldId).toBeUndefined();

@@ -19,6 +19,7 @@ import type { Revision, Units } from '#contracts';
 import type { ProblemError } from '../../http/problem-error';
 import { toProblemError } from '../../http/problem-error';
 import { ConflictNotice } from '../conflict-notice/conflict-notice';
+import { IntoView } from '../into-view/into-view';
 import { Notice } from '../notice/notice';
 import { SaveBar } from '../save-bar/save-bar';
 import { differencesOf, rebase } from './differences';
@@ -68,6 +69,7 @@ export interface Keeping {
     ConflictNotice,
     FactEditor,
     FactReading,
+    IntoView,
     MatButton,
     NgTemplateOutlet,
     Notice,

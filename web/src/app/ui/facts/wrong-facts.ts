@@ -34,7 +34,7 @@ export function joinWrong(
 /** Marks each wrong field, wipes older marks and says where each is. Nothing typed is touched. */
 export function markWrong(form: FactForm, wrong: readonly WrongFact[]): readonly MarkedFact[] {
   clear(form.root);
-  return wrong.map((fact) => {
+  const marked = wrong.map((fact) => {
     const { node, place } = find(form.root, fact.path);
     if (node) {
       node.wrong.update((known) => (known === null ? fact.sentence : `${known} ${fact.sentence}`));
@@ -42,6 +42,12 @@ export function markWrong(form: FactForm, wrong: readonly WrongFact[]): readonly
     }
     return { ...fact, place, fieldId: node?.id };
   });
+  return marked.sort((one, other) => orderOf(one) - orderOf(other));
+}
+
+/** Fields are numbered as they are made, which is the order they stand in. */
+function orderOf({ fieldId }: MarkedFact): number {
+  return Number(fieldId?.split('-').at(-1) ?? Infinity);
 }
 
 /**

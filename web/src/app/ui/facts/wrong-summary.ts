@@ -1,11 +1,14 @@
 import {
-  DOCUMENT,
   ChangeDetectionStrategy,
   Component,
+  DOCUMENT,
+  ElementRef,
+  afterRenderEffect,
   computed,
   inject,
   input,
 } from '@angular/core';
+import { bringIntoView } from '../into-view/into-view';
 import { Notice } from '../notice/notice';
 import { counted } from '../count';
 import type { MarkedFact } from './wrong-facts';
@@ -20,6 +23,7 @@ import type { MarkedFact } from './wrong-facts';
 })
 export class WrongSummary {
   readonly #document = inject(DOCUMENT);
+  readonly #host = inject<ElementRef<HTMLElement>>(ElementRef);
 
   readonly facts = input.required<readonly MarkedFact[]>();
 
@@ -27,6 +31,13 @@ export class WrongSummary {
     () =>
       `${counted(this.facts().length, 'entry', 'entries')} to put right; nothing was saved, nothing lost.`,
   );
+
+  constructor() {
+    // After each attempt, also when the same entries are still wrong.
+    afterRenderEffect(() => {
+      if (this.facts().length > 0) bringIntoView(this.#host.nativeElement);
+    });
+  }
 
   protected goTo(fact: MarkedFact): void {
     if (fact.fieldId === undefined) return;

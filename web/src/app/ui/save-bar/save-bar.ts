@@ -1,4 +1,11 @@
-import { ChangeDetectionStrategy, Component, input, model, output } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  ViewEncapsulation,
+  input,
+  model,
+  output,
+} from '@angular/core';
 import { FormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
@@ -10,6 +17,8 @@ import { MatInput } from '@angular/material/input';
   imports: [FormsModule, MatButton, MatFormField, MatInput, MatLabel],
   templateUrl: './save-bar.html',
   styleUrl: './save-bar.scss',
+  // Its styles reach the page: whatever takes the focus must not end up beneath it.
+  encapsulation: ViewEncapsulation.None,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class SaveBar {
