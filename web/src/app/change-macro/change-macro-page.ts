@@ -158,6 +158,7 @@ export class ChangeMacroPage implements HoldsUnsaved {
     const machine = this.#basedOn();
     const draft = this.draft();
     if (!machine || !draft || this.nameMissing()) return;
+    if (!this.hasUnsaved()) return this.drop();
     const macro = macroTextSchema.parse({
       name: draft.name.trim(),
       text: keepLineEnds(draft.text, machine.macro?.text ?? ''),

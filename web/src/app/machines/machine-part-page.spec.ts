@@ -92,6 +92,14 @@ describe('the page of one part of a machine', () => {
     page.http.expectNone(`${PATH}/description`);
   });
 
+  it('makes no revision when nothing was changed', async () => {
+    const page = await open('description', 'lead', 'inch');
+    await press(page, 'Change');
+    await press(page, 'Save as description 4');
+    page.http.expectNone(`${PATH}/description`);
+    expect(words(page)).not.toContain('Save as description');
+  });
+
   it('saves what was typed in inches as millimetres, on the revision it was read at', async () => {
     const page = await open('description', 'lead', 'inch');
     await press(page, 'Change');

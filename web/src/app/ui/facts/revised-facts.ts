@@ -22,7 +22,7 @@ import { ConflictNotice } from '../conflict-notice/conflict-notice';
 import { IntoView } from '../into-view/into-view';
 import { Notice } from '../notice/notice';
 import { SaveBar } from '../save-bar/save-bar';
-import { differencesOf, rebase } from './differences';
+import { differencesOf, isSame, rebase } from './differences';
 import { wordDifference } from './difference-words';
 import { FactEditor } from './fact-editor';
 import type { FactSection } from './fact-field';
@@ -190,6 +190,8 @@ export class RevisedFacts {
     this.wrong.set(markWrong(form, joinWrong(wrong, refused)));
     this.problem.set(null);
     if (this.wrong().length > 0) return;
+    // A revision that changes nothing would only push the last real one down the list.
+    if (!this.isNew() && isSame(value, this.#base().value)) return this.drop();
     await this.#send(form, value);
   }
 
