@@ -1,11 +1,12 @@
 import type * as events from './events';
+import { MotionCalls } from './motion-calls';
 
 type Listening<Kind extends keyof events.Observer> = Required<Pick<events.Observer, Kind>>;
 
 /** Passes each event to the observers that listen to its kind, in their order, and to no other. */
 export class Broadcaster {
   private readonly blocks: readonly Listening<'block'>[];
-  private readonly motions: readonly Listening<'motion'>[];
+  private readonly motions: MotionCalls;
   private readonly problems: readonly Listening<'problem'>[];
   private readonly comments: readonly Listening<'comment'>[];
   private readonly selections: readonly Listening<'toolSelected'>[];
@@ -28,7 +29,7 @@ export class Broadcaster {
     private readonly state: events.MachineState,
   ) {
     this.blocks = listening(observers, 'block');
-    this.motions = listening(observers, 'motion');
+    this.motions = new MotionCalls(observers, state);
     this.problems = listening(observers, 'problem');
     this.comments = listening(observers, 'comment');
     this.selections = listening(observers, 'toolSelected');
@@ -59,7 +60,7 @@ export class Broadcaster {
     for (const each of this.blocks) each.block(this.state);
   }
   motion(motion: events.Motion): void {
-    for (const each of this.motions) each.motion(motion, this.state);
+    this.motions.tell(motion);
   }
   problem(event: events.ProblemEvent): void {
     for (const each of this.problems) each.problem(event, this.state);

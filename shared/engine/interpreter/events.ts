@@ -263,9 +263,13 @@ export interface ProgramEndEvent {
 
 /** What a rule may listen to. A rule that names `motion` is called for every motion: keep it cheap. */
 export interface Observer {
+  /** The kinds of motion `motion` is called for; all of them when absent. The rest costs nothing then. */
+  readonly motionKinds?: readonly Motion['kind'][] | undefined;
   /** Every block that held at least one word, after it was carried out. */
   block?(state: MachineState): void;
-  motion?(motion: Motion, state: MachineState): void;
+  /** Whoever returns 'enough' is not called for a motion again in this walk. */
+  // eslint-disable-next-line @typescript-eslint/no-invalid-void-type -- observers that return nothing are the rule
+  motion?(motion: Motion, state: MachineState): void | 'enough';
   problem?(event: ProblemEvent, state: MachineState): void;
   comment?(event: CommentEvent, state: MachineState): void;
   toolSelected?(event: ToolSelectedEvent, state: MachineState): void;

@@ -10,7 +10,7 @@ import { testSetup } from './test-shop';
 export function eventsOf(
   program: string,
   change: object = {},
-  kinds: readonly (keyof Observer)[] = ['motion'],
+  kinds: readonly EventKind[] = ['motion'],
 ): string[] {
   const told: string[] = [];
   const add = (text: string, { line }: MachineState) => void told.push(`${line} ${text}`);
@@ -22,9 +22,10 @@ export function eventsOf(
   return told;
 }
 
+export type EventKind = Exclude<keyof Observer, 'motionKinds'>;
 type Add = (text: string, state: MachineState) => void;
 
-function observer(add: Add, told: string[]): Required<Observer> {
+function observer(add: Add, told: string[]): Required<Pick<Observer, EventKind>> {
   return {
     block: (state) => add('block', state),
     motion: (motion, state) => add(showMotion(motion), state),
@@ -57,7 +58,7 @@ function observer(add: Add, told: string[]): Required<Observer> {
   };
 }
 
-function only(kinds: readonly (keyof Observer)[], all: Required<Observer>): Observer {
+function only(kinds: readonly EventKind[], all: Required<Pick<Observer, EventKind>>): Observer {
   return Object.fromEntries(kinds.map((kind) => [kind, all[kind]])) as Observer;
 }
 
