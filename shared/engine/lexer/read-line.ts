@@ -140,7 +140,9 @@ function finishLine(bytes: Uint8Array, at: number, line: LineWords, count: numbe
     count = MOST_WORDS;
   }
   line.count = count;
-  return bytes[at] === CR && bytes[at + 1] === LF ? at + 2 : at + 1;
+  const next = at + 1;
+  // The text may end with the CR itself; reading past the bytes would slow every later read.
+  return bytes[at] === CR && next < bytes.length && bytes[next] === LF ? next + 1 : next;
 }
 
 /** A slash in front makes the block skippable; after the line number is common too, anywhere else is a fault. */
