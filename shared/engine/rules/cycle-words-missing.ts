@@ -23,9 +23,5 @@ export const cycleWordsMissing = defineRule({
     };
   },
   observe: (_shop, report) =>
-    reportProblem(
-      report,
-      'cycle-words-missing',
-      (facts) => `${text(facts, 'code')} ${text(facts, 'letters')}`,
-    ),
+    reportProblem(report, 'cycle-words-missing', (facts) => text(facts, 'code')),
 });
