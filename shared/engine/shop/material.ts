@@ -106,6 +106,9 @@ export class Material {
 
   private placed(now: WorkPlace): Prism | undefined {
     const { job } = this.shop.setup;
+    // Zero that is not set yet puts the stock nowhere; that it is not set is a finding of its own.
+    if (!this.frames.isSet(job?.stock?.in ?? now.workOffset, now)) return undefined;
+    if (!this.frames.isSet(now.workOffset, now)) return undefined;
     const tip = cylinderPrism({ x: 0, y: 0 }, (now.held.tool?.diameter ?? 0) / 2, [
       -tipDrop(now),
       Infinity,

@@ -24,12 +24,21 @@ export interface Place3 {
 export interface WorkFrames {
   /** Origin of a work offset: the point where its X, Y and Z are all zero. */
   origin(name: string, now: WorkPlace): Place3;
+  /** Whether all three axes of a work offset have a value, so that it can be placed in the machine. */
+  isSet(name: string, now: WorkPlace): boolean;
 }
 
 export function openWorkFrames(shop: Shop): WorkFrames {
   const { offsets } = shop.setup;
   const seen = new Map<string, { x: number; y: number; z: number }>();
   return {
+    isSet(name, now) {
+      if (name === now.workOffset) {
+        return now.originX !== undefined && now.originY !== undefined && now.originZ !== undefined;
+      }
+      const stored = seen.get(name) ?? offsets.work[name];
+      return stored?.x !== undefined && stored.y !== undefined && stored.z !== undefined;
+    },
     origin(name, now) {
       if (name === now.workOffset) {
         const active = { x: now.originX ?? 0, y: now.originY ?? 0, z: now.originZ ?? 0 };
