@@ -124,6 +124,14 @@ export const lineRangeSchema = z.object({
   lines: z.array(z.string()),
   total: z.number().int(),
 });
+export const blockWordsQuerySchema = z.object({ line: z.coerce.number().int().min(1) });
+export const blockWordsSchema = z.object({
+  line: z.number().int(),
+  words: z.array(z.object({ letter: z.string(), value: z.number() })),
+  comments: z.array(z.string()),
+  /** Whether the words and comments are the whole block; expressions and the like are not among them. */
+  isPlain: z.boolean(),
+});
 export const storedFindingSchema = findingSchema.extend({ id: z.string() });
 export const findingQuerySchema = z.object({
   severity: severitySchema.optional(),
@@ -200,6 +208,7 @@ export type ProgramDetails = z.output<typeof programDetailsSchema>;
 export type ProgramRevision = z.output<typeof programRevisionSchema>;
 export type UploadResult = z.output<typeof uploadResultSchema>;
 export type LineRange = z.output<typeof lineRangeSchema>;
+export type BlockWords = z.output<typeof blockWordsSchema>;
 export type StoredFinding = z.output<typeof storedFindingSchema>;
 export type FindingPage = z.output<typeof findingPageSchema>;
 export type FindingQuery = z.input<typeof findingQuerySchema>;

@@ -61,7 +61,7 @@ test('answers 404 to a person of another shop, on every route that takes an id',
     const body = bodies()[name];
     if (!id) throw new Error(`no id of a ${route.names} for ${name}`);
     if (route.body && !body) throw new Error(`no body for ${name}`);
-    const query = route.path.endsWith('/lines') ? '?from=1&to=2' : '';
+    const query = QUERIES[route.path.split('/').at(-1) ?? ''] ?? '';
     const refusals = [];
     for (const tried of [id, randomUUID(), 'not-an-id']) {
       const path = `${base}${route.path.replace(':id', tried)}${query}`;
@@ -110,3 +110,6 @@ test('lists nothing of another shop', async () => {
   for (const id of Object.values(ids)) expect(lists.flat()).not.toContain(id);
   expect((await stranger.get('/audit')).text).not.toContain('North router');
 });
+
+/** What a route refuses to answer without, so that the id is all that is wrong. */
+const QUERIES: Readonly<Record<string, string>> = { lines: '?from=1&to=2', words: '?line=1' };

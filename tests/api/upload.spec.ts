@@ -3,6 +3,7 @@ import { request as httpRequest } from 'node:http';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import {
   checkDetailsSchema,
+  blockWordsSchema,
   lineRangeSchema,
   programDetailsSchema,
   programPageSchema,
@@ -127,6 +128,26 @@ test('reads a file whose lines end in carriage returns alone', async () => {
   });
   const lines = await lead.get(`/program-revisions/${revisionId}/lines?from=2&to=3`);
   expect(lines.as(lineRangeSchema)).toEqual({ from: 2, lines: ['G90', 'M30'], total: 3 });
+});
+
+test('spells out the words of one block, and says when they are not all of it', async () => {
+  const { revisionId } = await uploadOne(lead, machineId, {
+    name: 'words.nc',
+    content: 'G21\nN20 G1 X12.5 (EDGE)\nG0 X[1+2]\nM30\n',
+  });
+  const words = async (line: number) =>
+    (await lead.get(`/program-revisions/${revisionId}/words?line=${line}`)).as(blockWordsSchema);
+  expect(await words(2)).toEqual({
+    line: 2,
+    words: [
+      { letter: 'G', value: 1 },
+      { letter: 'X', value: 12.5 },
+    ],
+    comments: ['EDGE'],
+    isPlain: true,
+  });
+  expect((await words(3)).isPlain).toBe(false);
+  expect((await words(9)).words).toEqual([]);
 });
 
 test('gives back the bytes exactly as they came, under the name of the program', async () => {

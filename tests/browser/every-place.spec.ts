@@ -47,6 +47,11 @@ describe('every place', () => {
         );
         if (overflow > 0) faults.push(`${name}: the page is ${overflow} px wider than the screen`);
       }
+      await page.context().clearCookies();
+      await signInAs(page, 'admin');
+      await page.goto('/shop/people');
+      await page.getByText('operator@fellrowan.example').waitFor();
+      faults.push(...(await faultsOf(page, 'people')));
       expect(faults).toEqual([]);
       expect(complaints).toEqual([]);
       await page.context().close();

@@ -50,6 +50,8 @@ describe('the main job', () => {
       const line = lines.locator('.line', { hasText: 'T7 M6' });
       expect((await line.locator('.number').textContent())?.trim()).toBe('22');
       expect(await line.locator('.stop').first().textContent()).toContain('T7');
+      await line.getByRole('button', { name: 'Words of line 22' }).click();
+      await programmer.page.getByText('tool change', { exact: true }).waitFor();
       const report = programmer.page.url();
 
       const operator = await visit(browser, product.address, { width: 1024 });

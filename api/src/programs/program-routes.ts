@@ -1,4 +1,6 @@
 import {
+  blockWordsQuerySchema,
+  blockWordsSchema,
   jobChangeSchema,
   lineRangeQuerySchema,
   lineRangeSchema,
@@ -12,6 +14,7 @@ import type { Dependencies } from '../dependencies';
 import { sendAsDownload } from '../http/download';
 import { notFound, refuse } from '../http/problems';
 import { defineRawRoute, defineRoute, type Route } from '../http/route';
+import { readBlockWords } from './block-words';
 import { changeJob } from './change-job';
 import { receiveUpload } from './receive-upload';
 import { sendText } from './send-text';
@@ -100,6 +103,21 @@ function textRoutes(deps: Dependencies): Route[] {
         const lines = await programs.lines(actor.shopId, id, query);
         if (!lines) throw notFound('program revision');
         return lines;
+      },
+    }),
+    defineRoute({
+      method: 'get',
+      path: '/program-revisions/:id/words',
+      names: 'program revision',
+      group: GROUP,
+      summary: 'The words of one block, letter by letter, for a person who asks',
+      may: 'read',
+      query: blockWordsQuerySchema,
+      reply: blockWordsSchema,
+      answer: async ({ actor, id, query: { line } }) => {
+        const range = await programs.lines(actor.shopId, id, { from: line, to: line });
+        if (!range) throw notFound('program revision');
+        return readBlockWords(line, range.lines[0] ?? '');
       },
     }),
     defineRawRoute({

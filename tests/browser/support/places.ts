@@ -6,7 +6,7 @@ export interface Place {
   readonly path: string;
 }
 
-/** Every place of the application, with the demo's machine, program and check in their addresses. */
+/** Every place a lead may see (people are the admin's), with the demo's machine, program and check in their addresses. */
 export async function placesOf(page: Page): Promise<Place[]> {
   const { machines } = await read<MachineList>(page, '/api/v1/machines');
   const { programs } = await read<ProgramPage>(page, '/api/v1/programs?limit=50');
@@ -28,7 +28,6 @@ export async function placesOf(page: Page): Promise<Place[]> {
     { name: 'machines', path: '/machines' },
     { name: 'machine', path: `/machines/${machine}` },
     { name: 'change-macro', path: `/change-macro/${machine}` },
-    { name: 'people', path: '/shop/people' },
     { name: 'audit', path: '/shop/audit' },
     { name: 'settings', path: '/shop/settings' },
   ];

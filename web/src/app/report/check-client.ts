@@ -3,6 +3,7 @@ import { Injectable, inject } from '@angular/core';
 import type { Observable } from 'rxjs';
 import { EMPTY, expand, map, reduce } from 'rxjs';
 import type {
+  BlockWords,
   CheckDetails,
   FindingPage,
   LineRange,
@@ -11,6 +12,7 @@ import type {
   StoredFinding,
 } from '#contracts';
 import {
+  blockWordsSchema,
   checkDetailsSchema,
   findingPageSchema,
   lineRangeSchema,
@@ -51,6 +53,12 @@ export class CheckClient {
     return this.#http
       .get(`/api/v1/program-revisions/${revisionId}/lines`, { params: { from, to } })
       .pipe(parsed(lineRangeSchema));
+  }
+
+  words(revisionId: string, line: number): Observable<BlockWords> {
+    return this.#http
+      .get(`/api/v1/program-revisions/${revisionId}/words`, { params: { line } })
+      .pipe(parsed(blockWordsSchema));
   }
 
   /** The machine as it stands now, to say what has changed since a check. */

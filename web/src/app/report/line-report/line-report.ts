@@ -18,6 +18,7 @@ import {
 import type { ProgramText } from '#engine';
 import { formatCount } from '../../ui/count';
 import { Notice } from '../../ui/notice/notice';
+import { BlockWordsPanel } from '../block-words/block-words';
 import { FindingCard } from '../finding-card/finding-card';
 import type { RunMode, ShownFinding } from '../shown-finding';
 import { drawRows, underlinesOf } from './draw-rows';
@@ -52,7 +53,7 @@ const NUMBER_WIDTH = 6.9;
  */
 @Component({
   selector: 'nl-line-report',
-  imports: [FindingCard, MeasuredHeight, Notice],
+  imports: [BlockWordsPanel, FindingCard, MeasuredHeight, Notice],
   providers: [ProgramLines],
   templateUrl: './line-report.html',
   styleUrl: './line-report.scss',
@@ -87,6 +88,8 @@ export class LineReport {
   protected readonly width = signal(0);
   /** A line that was asked for, pointed out until the next one is. */
   protected readonly askedLine = signal<number | null>(null);
+  /** The line whose words are spelt out below the report. */
+  protected readonly wordsOf = signal<number | null>(null);
   protected readonly said = signal('');
 
   readonly #indexOf = computed(

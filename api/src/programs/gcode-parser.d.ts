@@ -1,4 +1,4 @@
-/** The part of the package that the tests compare with; it ships no types of its own. */
+/** The part of the package that is used here and that the tests compare with; it ships no types of its own. */
 declare module 'gcode-parser' {
   export function parseLine(line: string): {
     readonly words: readonly (readonly [string, number | string])[];
