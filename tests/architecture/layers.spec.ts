@@ -23,7 +23,12 @@ const ENGINE_STAGES: Readonly<Record<string, readonly string[]>> = {
     'shared/engine/shop/',
     'shared/engine/geometry/',
   ],
+  'shared/engine/expressions/': ['shared/engine/lexer/'],
+  'shared/engine/statements/': ['shared/engine/expressions/', 'shared/engine/lexer/'],
   'shared/engine/interpreter/': [
+    'shared/engine/statements/',
+    'shared/engine/parameters/',
+    'shared/engine/expressions/',
     'shared/engine/blocks/',
     'shared/engine/lexer/',
     'shared/engine/source/',

@@ -73,10 +73,17 @@ describe('says what gcode-parser passes over in silence', () => {
     ['quoted text', 'G1 X1 "text X9"', 'odd-characters'],
     ['an exponent', 'G1 X1E3', 'unreadable-block'],
     ['a check sum', 'N3 T0*0', 'odd-characters'],
-    ['an expression', 'G1 X[1+2*3] Y[SQRT[4]]', 'not-modelled'],
-    ['a parameter', 'G1 X#5', 'not-modelled'],
-    ['an o-word', 'O100 IF [#1 GT 3]', 'not-modelled'],
   ])('%s: %s', (_what, text, problem) => {
     expect(ours(text).faults).toContain(problem);
   });
+
+  test.each(['G1 X[1+2*3] Y[SQRT[4]]', 'G1 X#5', 'O100 IF [#1 GT 3]'])(
+    'what has to be worked out is a statement: %s',
+    (text) => {
+      const line = new LineWords();
+      line.bytes = new TextEncoder().encode(`${text}\n`);
+      readLine(line.bytes, 0, line);
+      expect(line.isStatement).toBe(true);
+    },
+  );
 });

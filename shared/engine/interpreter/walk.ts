@@ -4,6 +4,7 @@ import { codeName, groupTables } from '../blocks/code-groups';
 import { LineWords } from '../lexer/line-words';
 import { readLine } from '../lexer/read-line';
 import type { Shop } from '../shop/shop';
+import { readStatement } from '../statements/read-statement';
 import { LONGEST_LINE, LineSource, type LineReader } from '../source/line-source';
 import { findDeclared } from './declared-codes';
 import { endProgram } from './ends';
@@ -130,11 +131,35 @@ export class Walk implements LineReader {
 
   private takeRareLine(): void {
     const { words, run } = this;
+    if (words.isStatement) this.readStatement();
     if (words.percentAt >= 0) this.takePercent();
     if (words.comments.length > 0 && run.dialect.isStrict) refuseLineComments(words);
-    const hasWords = words.count > 0 || words.faults.length > 0 || words.label !== '';
+    const hasWords = words.count > 0 || words.faults.length > 0 || words.isStatement;
     if (hasWords) this.takeRareBlock();
     else if (words.comments.length > 0 && !this.isDone) this.tellComments();
+  }
+
+  /** What computes or steers is read and named; nothing of it is worked out yet. */
+  private readStatement(): void {
+    const { words, run } = this;
+    const isMacro = run.controller.language === 'custom-macro';
+    const {
+      words: written,
+      settings,
+      flow,
+    } = readStatement(words, { isMacro, isStrict: run.dialect.isStrict });
+    const isLabel = flow?.kind === 'labelled' && flow.keyword === 'program';
+    if (isLabel || words.isVoid) return;
+    const reason = flow ? 'flow' : settings.length > 0 ? 'parameter' : 'computed';
+    const { from, to } =
+      flow ?? settings[0] ?? written.find(({ value }) => value.kind !== 'number')!;
+    words.fault({
+      problem: 'not-modelled',
+      from: words.start + from,
+      to: words.start + to,
+      facts: { what: words.text(words.start + from, words.start + to), reason },
+      voids: true,
+    });
   }
 
   private takeRareBlock(): void {

@@ -63,10 +63,11 @@ export class LineWords {
   skipAt = 0;
   /** Where a percent sign stands, or -1. */
   percentAt = -1;
-  /** An O word's label as written, such as '1000' or '<name>'; '' for none. */
-  label = '';
-  labelFrom = 0;
-  labelTo = 0;
+  /**
+   * Whether the line computes or steers. The lexer then leaves everything else of it to readStatement:
+   * its words, comments and faults stand here only once that has read it.
+   */
+  isStatement = false;
   readonly comments: CommentText[] = [];
   readonly faults: Fault[] = [];
   /** Whether some fault voids the block. */
@@ -79,7 +80,7 @@ export class LineWords {
     this.isRare = false;
     this.skippable = false;
     this.percentAt = -1;
-    this.label = '';
+    this.isStatement = false;
     this.comments.length = 0;
     this.faults.length = 0;
     this.isVoid = false;

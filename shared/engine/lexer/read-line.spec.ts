@@ -41,11 +41,7 @@ test.each([
   ['/2 G0 X1', 'G0 X1'],
   ['N10 /G0 X1', 'N10 G0 X1'],
   [':T1 M6', 'T1 M6'],
-  [':1001', ''],
   ['% anything at all', ''],
-  ['O1000 (NAME)', ''],
-  ['o1000', ''],
-  ['N5 O1000', 'N5'],
 ])('reads %j as %j and finds nothing wrong', (text, words) => {
   const line = lineOf(text);
   expect(wordsOf(line)).toBe(words);
@@ -80,20 +76,41 @@ test.each([
   ['X1 (open', 'X1', ['3-8 unreadable-block comment-not-closed (carried out)']],
   ['X1 (a (b) c) Y2', 'X1 Y2', ['6-7 nested-comment (carried out)']],
   ['X1 (a (b c) Y2', 'X1', ['6-7 nested-comment (carried out)']],
-  // What macros are made of.
-  ['G1 X[1+2*3] Y2', 'G1 Y2', ['3-11 not-modelled computed']],
-  ['G1 X#5', 'G1', ['3-6 not-modelled computed']],
-  ['G1 X SQRT[4] Y2', 'G1 Y2', ['3-12 not-modelled computed']],
-  ['#1=5', '', ['0-4 not-modelled parameter']],
-  ['IF [#1 GT 3] GOTO 20', '', ['0-20 not-modelled flow']],
-  ['WHILE[#1LT3]DO1', '', ['0-15 not-modelled flow']],
-  ['GOTO 10', '', ['0-7 not-modelled flow']],
-  ['o100 sub', '', ['0-8 not-modelled flow']],
-  ['O<name> call [1]', '', ['0-16 not-modelled flow']],
 ])('reads %j as %j and says why not all of it', (text, words, faults) => {
   const line = lineOf(text);
   expect(wordsOf(line)).toBe(words);
   expect(faultsOf(line)).toEqual(faults);
+});
+
+test.each([
+  'G1 X[1+2*3] Y2',
+  'G1 X#5',
+  'G1 X SQRT[4] Y2',
+  'X-#5',
+  '#1=5',
+  'IF [#1 GT 3] GOTO 20',
+  'WHILE[#1LT3]DO1',
+  'GOTO 10',
+  'o100 sub',
+  'O<name> call [1]',
+  'O1000 (NAME)',
+  'N5 O1000',
+  ':1001 (NAME)',
+])('leaves %j to be read as a statement', (text) => {
+  expect(lineOf(text).isStatement).toBe(true);
+});
+
+test.each(['G1 X5', '(#1=5)', 'X1 ; GOTO 5', ':T1 M6', ':10 G0 X1', 'MO6', 'G41 DO1', 'X5,R2'])(
+  'takes %j for no statement',
+  (text) => {
+    expect(lineOf(text).isStatement).toBe(false);
+  },
+);
+
+test('names a rounded corner and keeps the words around it', () => {
+  const line = lineOf('X10,R2.5 Y3');
+  expect(wordsOf(line)).toBe('X10 Y3');
+  expect(faultsOf(line)).toEqual(['3-8 not-modelled corner (carried out)']);
 });
 
 test('a word ends where its number does, blanks behind it left out', () => {

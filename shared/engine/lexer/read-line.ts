@@ -1,6 +1,16 @@
 import * as kind from './bytes';
 import { MOST_WORDS, type LineWords } from './line-words';
-import { readRestOfValue, skipComment, skipLabel, skipParameter } from './rare-words';
+import {
+  markStatement,
+  readColon,
+  readLetterO,
+  readOdd,
+  readPercent,
+  readSlash,
+  skipComment,
+  skipLineComment,
+} from './marks';
+import { readRestOfValue } from './rare-words';
 
 const LF = 10;
 const CR = 13;
@@ -10,7 +20,6 @@ const PLUS = 43;
 const MINUS = 45;
 const POINT = 46;
 const ZERO = 48;
-const LETTER_N = 13;
 /** So many digits always fit 32 bits; longer numbers are rare, and read apart. */
 const SHORT_DIGITS = 9;
 const CLASS_OF = kind.CLASS_OF;
@@ -85,7 +94,7 @@ export function readLine(bytes: Uint8Array, at: number, line: LineWords): number
       }
       case kind.LETTER_O:
         line.count = count;
-        at = skipLabel(line, at);
+        at = readLetterO(line, at);
         count = line.count;
         break;
       case kind.BLANK:
@@ -97,7 +106,7 @@ export function readLine(bytes: Uint8Array, at: number, line: LineWords): number
         at = skipComment(line, at);
         break;
       case kind.SEMICOLON:
-        at = skipToLineEnd(line, at + 1);
+        at = skipLineComment(line, at + 1);
         break;
       case kind.SLASH:
         at = readSlash(line, at, count);
@@ -109,22 +118,12 @@ export function readLine(bytes: Uint8Array, at: number, line: LineWords): number
         at = readColon(line, at, count);
         break;
       case kind.PARAMETER:
-        at = skipParameter(line, at);
+        at = markStatement(line, at);
         break;
       default:
         at = readOdd(line, at);
     }
   }
-}
-
-function skipToLineEnd(line: LineWords, from: number): number {
-  const { bytes } = line;
-  let bits = 0;
-  let at = from;
-  while (CLASS_OF[bytes[at]!] !== kind.LINE_END) bits |= bytes[at++]!;
-  line.bits |= bits;
-  line.comment(from, at, true);
-  return at;
 }
 
 function finishLine(bytes: Uint8Array, at: number, line: LineWords, count: number): number {
@@ -143,61 +142,4 @@ function finishLine(bytes: Uint8Array, at: number, line: LineWords, count: numbe
   const next = at + 1;
   // The text may end with the CR itself; reading past the bytes would slow every later read.
   return bytes[at] === CR && next < bytes.length && bytes[next] === LF ? next + 1 : next;
-}
-
-/** A slash in front makes the block skippable; after the line number is common too, anywhere else is a fault. */
-function readSlash(line: LineWords, at: number, count: number): number {
-  const onlyNumber = count === 1 && line.letters[0] === LETTER_N;
-  if ((count === 0 || onlyNumber) && line.label === '' && !line.skippable) {
-    line.isRare = true;
-    line.skippable = true;
-    line.skipAt = at;
-    const next = line.bytes[at + 1]! - ZERO;
-    // A digit names which of several switches skips the block; any of them may be on.
-    return 1 <= next && next <= 9 ? at + 2 : at + 1;
-  }
-  line.fault({
-    problem: 'unreadable-block',
-    from: at,
-    to: at + 1,
-    facts: { reason: 'slash', what: '/' },
-    voids: true,
-  });
-  return at + 1;
-}
-
-/** A percent sign opens or closes the program; text behind it belongs to the sign. */
-function readPercent(line: LineWords, at: number, count: number): number {
-  if (count > 0 || line.label !== '') return readOdd(line, at);
-  line.isRare = true;
-  line.percentAt = at;
-  while (CLASS_OF[line.bytes[at]!] !== kind.LINE_END) line.bits |= line.bytes[at++]!;
-  return at;
-}
-
-/** A colon marks a main block; with digits it is how some write a program number. */
-function readColon(line: LineWords, at: number, count: number): number {
-  if (count > 0) return readOdd(line, at);
-  at++;
-  while ((line.bytes[at]! - ZERO) >>> 0 <= 9) at++;
-  return at;
-}
-
-function readOdd(line: LineWords, at: number): number {
-  const { bytes } = line;
-  const from = at;
-  line.bits |= bytes[at]!;
-  const isStray = CLASS_OF[bytes[at]!] !== kind.ODD;
-  at++;
-  if (!isStray) while (CLASS_OF[bytes[at]!] === kind.ODD) at++;
-  line.fault({
-    problem: isStray ? 'unreadable-block' : 'odd-characters',
-    from,
-    to: at,
-    facts: isStray
-      ? { reason: bytes[from] === 41 ? 'stray-bracket' : 'stray-text', what: line.text(from, at) }
-      : { what: line.text(from, Math.min(at, from + 8)), byte: bytes[from]! },
-    voids: isStray && bytes[from] !== 41,
-  });
-  return at;
 }

@@ -28,6 +28,8 @@ function describe(data: Parameters<typeof text>[0]): string {
       return `${what} sets a parameter, which this check does not follow.`;
     case 'flow':
       return `${what} steers the order of the blocks, which this check does not follow.`;
+    case 'corner':
+      return `${what} rounds or breaks the corner there, which this check does not follow.`;
     case 'no-reference':
       return `${what} goes to a reference point that the machine description does not give.`;
     case 'call':
