@@ -17,6 +17,10 @@ export const COUNTS = {
   arcs: of(300, 20_000),
   /** Plain programs whose words are compared with those of gcode-parser. */
   tokenPrograms: of(60, 3_000),
+  /** Random expressions over bounds, each compared at eight points. */
+  intervals: of(4_000, 400_000),
+  /** Mutated statements that must neither crash nor hang their reader. */
+  statements: of(6_000, 400_000),
   /** Mutated programs that must neither crash nor hang. */
   fuzz: of(400, 50_000),
   /** Random byte strings pushed as they are. */

@@ -61,7 +61,7 @@ function traceObserver(emit: (motion: TraceMotion) => void): Observer {
   return {
     motion(motion, state) {
       const turnsA = motion.toA !== motion.fromA;
-      if (!motion.moves && !turnsA) return;
+      if ((!motion.moves && !turnsA) || motion.isAlternative) return;
       const { x, y, z } = roundPoint(motion.toX, motion.toY, motion.toZ);
       emit({
         ...placeOf(state),

@@ -33,7 +33,9 @@ export function runRow(row: Row, setup: Setup): Ran {
     events.push({ line, ev, value });
   const observer: Observer = {
     block: (now) => (state = now),
-    motion: (motion, { line }) => void motions.push({ ...motion, line }),
+    motion: (motion, { line }) => {
+      if (!motion.isAlternative) motions.push({ ...motion, line });
+    },
     problem: ({ problem, place }) => problems.push({ problem, line: place.line }),
     comment: ({ text, message }, now) => add(message ? 'message' : 'comment', text, now),
     toolSelected: ({ number }, now) => add('select_tool', number, now),

@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { differences } from './agreement';
 import { NOT_COVERED } from './not-covered';
+import { parametersAfter, statesParameters } from './parameters-after';
 import { readRows } from './row';
 import { rowSetup } from './row-setup';
 import { runRow } from './run-row';
@@ -20,6 +21,19 @@ describe('agrees with the worked example', () => {
     '$title',
     ({ row }) => {
       expect(differences(row, runRow(row, rowSetup(row)))).toEqual([]);
+    },
+  );
+});
+
+describe('leaves the parameters that the worked example states', () => {
+  const stating = rows.filter((row) => statesParameters(row) && !NOT_COVERED.includes(row.id));
+  test('there are such rows', () => expect(stating.length).toBeGreaterThan(10));
+  test.each(stating.map((row) => ({ title: `${row.id} ${row.covers} [${row.source}]`, row })))(
+    '$title',
+    ({ row }) => {
+      const after = parametersAfter(row, rowSetup(row));
+      for (const [number, value] of Object.entries(row.expected.params!))
+        expect(after[number], `#${number}`).toBeCloseTo(value, 5);
     },
   );
 });

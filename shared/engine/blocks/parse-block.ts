@@ -185,11 +185,17 @@ function countIncrements(words: LineWords, increment: number): void {
   }
 }
 
+/** A word with a point says what it says, and so does one that was worked out: its variables hold decimals. */
 function hasPoint({ bytes, starts, ends }: LineWords, word: number): boolean {
-  for (let at = starts[word]!; at < ends[word]!; at++) if (bytes[at] === POINT) return true;
+  for (let at = starts[word]!; at < ends[word]!; at++) {
+    const byte = bytes[at];
+    if (byte === POINT || byte === HASH || byte === OPEN_SQUARE) return true;
+  }
   return false;
 }
 const POINT = 46;
+const HASH = 35;
+const OPEN_SQUARE = 91;
 
 const CLAIMS = 1 << GROUP.once;
 /** G10, G28, G30 and the setting codes of G92 and G52 each want the axis words for themselves. */

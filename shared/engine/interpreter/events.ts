@@ -64,6 +64,11 @@ export interface Motion {
   named: number;
   /** Set where the end is only known within bounds (a probe that may stop early). */
   endUnknown: boolean;
+  /**
+   * Whether this is another reading of the motion told before it, at the other end of what is not known: it
+   * may happen instead of that one, so it is judged, but neither timed nor counted.
+   */
+  isAlternative: boolean;
 }
 
 export type Plane = 'xy' | 'zx' | 'yz';

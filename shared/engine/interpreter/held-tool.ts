@@ -1,7 +1,7 @@
 import type { Run } from './run';
 
 /** What the spindle holds from now on: 0 nothing, null not known. */
-export function hold(run: Run, number: number | null): void {
+export function hold(run: Pick<Run, 'machine' | 'shop'>, number: number | null): void {
   const { held } = run.machine;
   held.known = number !== null;
   held.number = number;

@@ -23,6 +23,7 @@ import { applyLength, applyWorkOffset } from './offset-words';
 import { probe } from './probe';
 import { refuse, tellProblem, type Run } from './run';
 import { changeTool, selectTool } from './tool-change';
+import { moveAtBounds } from './unknown-position';
 import { checkUse, RARE_LETTERS } from './unused-words';
 
 const { F, S, T } = LETTER;
@@ -52,7 +53,10 @@ export function carryOut(run: Run): void {
   if ((groups & ~MOTION_BIT) !== 0 || (seen & (1 << T)) !== 0 || block.others.length > 0)
     carryOutSettings(run);
   if (!run.refused) {
-    if ((groups & ~MOTION_BIT) === 0 && run.loneMachineMove === undefined) carryOutPlain(run);
+    const isPlain = (groups & ~MOTION_BIT) === 0 && run.loneMachineMove === undefined;
+    const { unknown } = run;
+    if (unknown !== undefined) moveAtBounds(run, unknown, isPlain ? carryOutPlain : carryOutMotion);
+    else if (isPlain) carryOutPlain(run);
     else carryOutMotion(run);
   }
   if ((groups & STOP_BIT) !== 0 && !run.refused) carryOutStop(run);

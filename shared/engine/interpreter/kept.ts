@@ -1,3 +1,4 @@
+import type { Value } from '../expressions/value';
 import type { Machine } from './machine';
 
 /** What the interpreter keeps beside the machine's state: scratch, and what lasts from block to block. */
@@ -15,6 +16,16 @@ export interface Circle {
   u: number;
   v: number;
   radius: number;
+}
+
+/** Where probing ended, in program coordinates and the units then in force; A in degrees. */
+export interface ProbeResult {
+  x: Value;
+  y: Value;
+  z: Value;
+  a: Value;
+  /** 1 if something was touched. */
+  touched: Value;
 }
 
 /** What a canned cycle keeps from one block to the next: words in program units, levels in machine mm. */

@@ -2,7 +2,7 @@ import { expect, test } from 'vitest';
 import { startTrace, type Motion } from '../index';
 import { testSetup } from '../testing/test-shop';
 
-const PROGRAM = 'G21 G90 G54\nG0 X1\nG1 X2 F9\nG2 X4 I1\nG38.2 Z-1\nG0 X5\nG1 X6\nM30';
+const PROGRAM = 'G21 G90 G54\nG0 X1\nG1 X2 F9\nG2 X4 I1\nG0 X5\nG1 X6\nG38.2 Z-1\nM30';
 
 function kindsSeen(...observers: { motionKinds?: Motion['kind'][]; most?: number }[]): string[] {
   const seen = observers.map(() => '');
@@ -22,7 +22,7 @@ function kindsSeen(...observers: { motionKinds?: Motion['kind'][]; most?: number
 
 test('an observer is called for every motion, or for the kinds it names', () => {
   expect(kindsSeen({}, { motionKinds: ['rapid'] }, { motionKinds: ['feed', 'arc'] })).toEqual([
-    'rapid feed arc probe rapid feed',
+    'rapid feed arc rapid feed probe',
     'rapid rapid',
     'feed arc feed',
   ]);
@@ -31,7 +31,7 @@ test('an observer is called for every motion, or for the kinds it names', () => 
 test('an observer that has seen enough is left alone, and the others are not', () => {
   expect(kindsSeen({ most: 2 }, {}, { most: 1, motionKinds: ['feed'] })).toEqual([
     'rapid feed',
-    'rapid feed arc probe rapid feed',
+    'rapid feed arc rapid feed probe',
     'feed',
   ]);
 });

@@ -47,6 +47,7 @@ export function emptyMotion(): Motion {
     inHole: false,
     named: 0,
     endUnknown: false,
+    isAlternative: false,
   };
 }
 

@@ -19,6 +19,7 @@ export function applyWorkOffset(run: Run): void {
   }
   const from = machine.workOffset;
   machine.workOffset = to;
+  if (from !== to) run.offsets.settle(to);
   placeProgramZero(run);
   setModal(run, 'workOffset', GROUP.workOffset, from, to);
   if (from !== to) run.tell.offsetChanged({ from, to, place: machine.place({ code }) });

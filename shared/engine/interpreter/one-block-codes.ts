@@ -124,6 +124,7 @@ function setOrigin(run: Run, name: string, isHere: boolean): void {
   AXES.forEach((axis, index) => {
     const word = axisWord(run, index);
     if (word === undefined) return;
+    offsets.forget(name, axis);
     origin[axis] = isHere ? here[index]! - offsets.preset[axis] - offsets.local[axis] - word : word;
   });
   run.toldUnset.delete(name);

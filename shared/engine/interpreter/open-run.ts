@@ -7,6 +7,7 @@ import { Broadcaster } from './broadcaster';
 import { emptyCycle } from './cycle-words';
 import type { Observer } from './events';
 import { hold } from './held-tool';
+import { notProbed, openParameters } from './live-parameters';
 import { Machine, NO_MOTION } from './machine';
 import { emptyMotion } from './motions';
 import { placeProgramZero } from './program-zero';
@@ -23,16 +24,27 @@ export function openRun(shop: Shop, block: Block, observers: readonly Observer[]
   machine.y = start?.y ?? travel.y[0];
   machine.z = start?.z ?? travel.z[1];
   machine.a = 0;
-  const run: Run = {
+  const grammar = {
+    isMacro: controller.language === 'custom-macro',
+    isStrict: controller.switches.strict,
+  };
+  const known = {
     shop,
     controller,
+    machine,
+    offsets: new WorkOffsets(offsets),
+    references: { g28: description.references.g28, g30: description.references.g30 },
+    probed: notProbed(),
+  };
+  const run: Run = {
+    ...known,
+    grammar,
+    parameters: openParameters(known, grammar),
     dialect: openDialect(controller),
     block,
-    machine,
     tell: new Broadcaster(observers, machine),
-    offsets: new WorkOffsets(offsets),
     lengths: new Map(Object.entries(offsets.length).map(([number, mm]) => [Number(number), mm])),
-    references: { g28: description.references.g28, g30: description.references.g30 },
+    unknown: undefined,
     cycle: emptyCycle(),
     motion: emptyMotion(),
     target: { x: 0.5, y: 0.5, z: 0.5, a: 0.5 },

@@ -2,11 +2,12 @@ import { codeName } from '../blocks/code-groups';
 import type { Target } from './kept';
 import { moveStraight } from './motions';
 import { refuse, tellProblem, type Run } from './run';
+import { noteProbed, stopBetween } from './unknown-position';
 
 /** NISTIR 6556: a probing target lies at least this far away, mm (0.010 inch). */
 const SHORTEST_PROBE = 0.254;
 
-/** G38.2 and its kin: towards the target, perhaps not all the way; the walk goes on from the target. */
+/** G38.2 and its kin: towards the target, perhaps not all the way: from then on the head is somewhere between. */
 export function probe(run: Run, code: number, target: Target, feed: number): void {
   const { machine, motion } = run;
   const what = codeName('G', code);
@@ -22,7 +23,11 @@ export function probe(run: Run, code: number, target: Target, feed: number): voi
       value: distance,
       needs: 'farther',
     });
+  const from = { x: machine.x, y: machine.y, z: machine.z, a: machine.a };
+  const isUnknown = motion.endUnknown;
   motion.endUnknown = true;
   moveStraight(run, 'probe', 'program', target, feed);
-  motion.endUnknown = false;
+  motion.endUnknown = isUnknown;
+  stopBetween(run, from, target);
+  noteProbed(run, code === 382 || code === 384);
 }

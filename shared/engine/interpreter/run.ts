@@ -1,11 +1,14 @@
 import type { Block } from '../blocks/block';
 import type { BlockDialect } from '../blocks/parse-block';
+import type { Grammar } from '../expressions/grammar';
+import type { ParameterStore } from '../parameters/parameter-store';
 import type { DeclaredCode, Point, Setup } from '../shop/setup';
 import type { Shop } from '../shop/shop';
 import type { Broadcaster } from './broadcaster';
 import type { Motion, Place, Problem, Words } from './events';
-import type { Circle, CycleMemory, SavedState, Target } from './kept';
+import type { Circle, CycleMemory, ProbeResult, SavedState, Target } from './kept';
 import type { Machine } from './machine';
+import type { Unknown } from './unknown-position';
 import type { WorkOffsets } from './work-offsets';
 
 /** What every part of the interpreter works on: one walk of one program over one machine. */
@@ -21,6 +24,11 @@ export interface Run {
   readonly lengths: Map<number, number>;
   /** The stored points of G28 and G30; their .1 forms change them. */
   readonly references: { g28: Point | undefined; g30: Point | undefined };
+  readonly grammar: Grammar;
+  readonly parameters: ParameterStore;
+  readonly probed: ProbeResult;
+  /** What is not known of where the head is, and of the block's words; undefined while all is. */
+  unknown: Unknown | undefined;
   readonly cycle: CycleMemory;
   /** Scratch, so that motion allocates nothing. */
   readonly motion: Motion;
@@ -35,7 +43,7 @@ export interface Run {
   /** Whether anything was called, so that blocks after the end may be what was called. */
   callsMade: boolean;
   /** The end code met, or '' while the program runs. */
-  endedBy: '' | 'M2' | 'M30' | 'M99' | '%';
+  endedBy: '' | 'M2' | 'M30' | 'M99' | '%' | 'alarm';
   /** Whether the block has been refused part-way, so that nothing more of it is carried out. */
   refused: boolean;
 }

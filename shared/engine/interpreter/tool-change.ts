@@ -93,6 +93,7 @@ function carryOutChange(run: Run, written: number): void {
     machine.x = changePoint.x;
     machine.y = changePoint.y;
     machine.z = changePoint.z;
+    run.unknown = undefined;
   }
   machine.changed = true;
   hold(run, to);

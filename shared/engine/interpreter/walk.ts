@@ -5,6 +5,7 @@ import { LineWords } from '../lexer/line-words';
 import { readLine } from '../lexer/read-line';
 import type { Shop } from '../shop/shop';
 import { readStatement } from '../statements/read-statement';
+import type { Statement } from '../statements/statement';
 import { LONGEST_LINE, LineSource, type LineReader } from '../source/line-source';
 import { findDeclared } from './declared-codes';
 import { endProgram } from './ends';
@@ -13,6 +14,8 @@ import { carryOut } from './interpreter';
 import { openRun } from './open-run';
 import { tellProblem, type Run } from './run';
 import { carryOutUnknown } from './unknown-codes';
+import { forgetUnknownWords } from './unknown-position';
+import { workOut } from './work-out';
 
 export interface WalkOptions {
   /** Whether blocks with a `/` in front are skipped. */
@@ -131,38 +134,15 @@ export class Walk implements LineReader {
 
   private takeRareLine(): void {
     const { words, run } = this;
-    if (words.isStatement) this.readStatement();
+    const statement = words.isStatement ? readStatement(words, run.grammar) : undefined;
     if (words.percentAt >= 0) this.takePercent();
     if (words.comments.length > 0 && run.dialect.isStrict) refuseLineComments(words);
     const hasWords = words.count > 0 || words.faults.length > 0 || words.isStatement;
-    if (hasWords) this.takeRareBlock();
+    if (hasWords) this.takeRareBlock(statement);
     else if (words.comments.length > 0 && !this.isDone) this.tellComments();
   }
 
-  /** What computes or steers is read and named; nothing of it is worked out yet. */
-  private readStatement(): void {
-    const { words, run } = this;
-    const isMacro = run.controller.language === 'custom-macro';
-    const {
-      words: written,
-      settings,
-      flow,
-    } = readStatement(words, { isMacro, isStrict: run.dialect.isStrict });
-    const isLabel = flow?.kind === 'labelled' && flow.keyword === 'program';
-    if (isLabel || words.isVoid) return;
-    const reason = flow ? 'flow' : settings.length > 0 ? 'parameter' : 'computed';
-    const { from, to } =
-      flow ?? settings[0] ?? written.find(({ value }) => value.kind !== 'number')!;
-    words.fault({
-      problem: 'not-modelled',
-      from: words.start + from,
-      to: words.start + to,
-      facts: { what: words.text(words.start + from, words.start + to), reason },
-      voids: true,
-    });
-  }
-
-  private takeRareBlock(): void {
+  private takeRareBlock(statement: Statement | undefined): void {
     const { words, run } = this;
     this.blocks++;
     if (this.isDone) return this.tellTextAfter();
@@ -171,9 +151,29 @@ export class Walk implements LineReader {
       this.firstSkippable ??= run.machine.place({ bytes: [at, at + 1] });
       if (this.options.skips) return;
     }
+    if (statement) this.takeStatement(statement);
     parseBlock(words, this.block, run.dialect);
     if (words.count > 0 || words.faults.length > 0) this.isEmpty = false;
     this.finishRareBlock();
+  }
+
+  /** What computes is worked out into the block's words; what steers is named, and not followed yet. */
+  private takeStatement(statement: Statement): void {
+    const { words, run } = this;
+    const { flow, settings } = statement;
+    const isLabel = flow?.kind === 'labelled' && flow.keyword === 'program';
+    if (settings.length > 0) this.isEmpty = false;
+    if (flow && !isLabel)
+      words.fault({
+        problem: 'not-modelled',
+        from: words.start + flow.from,
+        to: words.start + flow.to,
+        facts: { what: words.text(words.start + flow.from, words.start + flow.to), reason: 'flow' },
+        voids: true,
+      });
+    else if (!words.isVoid) workOut(run, statement);
+    // Of a block that is not carried out, words without a value would only be found faulty again.
+    if (words.isVoid) words.count = 0;
   }
 
   private finishRareBlock(): void {
@@ -181,8 +181,10 @@ export class Walk implements LineReader {
     if (this.block.others.length > 0) this.resolveOthers();
     if (words.faults.length > 0) this.tellFaults();
     if (words.comments.length > 0) this.tellComments();
-    if (words.isVoid) run.tell.block();
-    else this.finishBlock();
+    if (words.isVoid) {
+      forgetUnknownWords(run);
+      run.tell.block();
+    } else this.finishBlock();
   }
 
   /** A declared code whose conditions do not hold here keeps its built-in meaning. */

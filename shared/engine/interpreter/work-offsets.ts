@@ -31,6 +31,8 @@ export class WorkOffsets {
   /** G52. */
   readonly local = noShift();
   private readonly origins = new Map<string, Origin>();
+  /** What parameters of the active offset were set to: it counts from the next selection on. */
+  private readonly waiting = new Map<string, Partial<Shift>>();
 
   constructor(offsets: Offsets) {
     for (const [name, { x, y, z, a }] of Object.entries(offsets.work))
@@ -44,6 +46,30 @@ export class WorkOffsets {
       this.origins.set(name, origin);
     }
     return origin;
+  }
+
+  /** What the parameter of an origin reads, mm. */
+  assigned(name: string, axis: AxisName): number | undefined {
+    return this.waiting.get(name)?.[axis] ?? this.origin(name)[axis];
+  }
+
+  /** Sets an origin by its parameter: the active one does not move until it is selected anew (facts sheet 4.4). */
+  assign(name: string, axis: AxisName, mm: number, isActive: boolean): void {
+    if (isActive) this.waiting.set(name, { ...this.waiting.get(name), [axis]: mm });
+    else this.origin(name)[axis] = mm;
+  }
+
+  /** Brings in force what was assigned to an offset while it was active. */
+  settle(name: string): void {
+    const waiting = this.waiting.get(name);
+    if (!waiting) return;
+    Object.assign(this.origin(name), waiting);
+    this.waiting.delete(name);
+  }
+
+  /** G10 overrides what a parameter was set to. */
+  forget(name: string, axis: AxisName): void {
+    delete this.waiting.get(name)?.[axis];
   }
 }
 

@@ -35,6 +35,9 @@ const FLOW_WORDS: readonly string[] = [
   'WEND',
 ];
 
+/** Letters of a function's name, with room for one that is misspelt. */
+const LONGEST_FUNCTION = 10;
+
 export const isDigit = (byte: number): boolean => 48 <= byte && byte <= 57;
 export const isBlank = (byte: number): boolean => byte === SPACE || byte === TAB;
 
@@ -265,7 +268,7 @@ export function beginsValue(line: LineWords, at: number): boolean {
   if (bytes[at] === HASH || bytes[at] === OPEN_SQUARE) return true;
   let letters = 0;
   for (; isLetter(bytes[at]!) || (letters > 0 && isBlank(bytes[at]!)); at++)
-    if (isLetter(bytes[at]!)) letters++;
+    if (isLetter(bytes[at]!) && ++letters > LONGEST_FUNCTION) return false;
   return letters >= 2 && bytes[at] === OPEN_SQUARE;
 }
 

@@ -56,7 +56,7 @@ export function watchTimes(shop: Shop): Observer & { result(): Times } {
   };
   return {
     motion(motion, state) {
-      if (!motion.moves || motion.by === 'change') return;
+      if (!motion.moves || motion.by === 'change' || motion.isAlternative) return;
       if (motion.kind !== 'rapid') return follow(motion, state);
       rest();
       if (controller.rapids === 'independent') {

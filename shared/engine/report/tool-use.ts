@@ -62,6 +62,7 @@ export function watchToolUse(
       const lowest = ownLeast(motion.fromZ, motion.toZ, motion.minZ) - zeroOfTip;
       if (lowest < use.lowest) use.lowest = lowest;
       if (state.turning === 'off') return;
+      if (motion.isAlternative) return;
       if (motion.kind === 'feed' || motion.kind === 'arc') use.cutLength += motion.length;
     },
     result: (cuttingByTool) =>

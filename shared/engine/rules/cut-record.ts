@@ -26,7 +26,8 @@ export function openCutRecord(shop: Shop, material: Material): CutRecord {
   const radius = (state: MachineState) => (state.held.tool?.diameter ?? THIN_CUTTER) / 2;
   return {
     record(motion, state) {
-      if (motion.kind === 'probe' || state.turning === 'off') return;
+      // Where a motion is only known within bounds, nothing is known to be cut.
+      if (motion.endUnknown || state.turning === 'off') return;
       const region = material.regionFor(state);
       if (!region || !(motion.minZ < region.maxZ)) return;
       grid.press(motion, radius(state), tipDrop(state));

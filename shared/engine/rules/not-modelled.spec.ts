@@ -14,15 +14,49 @@ M30
   );
 });
 
-test('flags a value from an expression and a parameter', () => {
+test('flags what depends on a parameter that nobody states', () => {
   checkRule(
     notModelled,
     {},
     `
-G0 X[1+2]
-   ^^^^^^ not-modelled: X[1+2] takes its value from an expression, which this check does not work out.
+G0 X[#100+2]
+   ^^^^^^^^^ not-modelled: X[#100+2] depends on #100, which is not known before the run.
+M30
+`,
+  );
+});
+
+test('flags a rounded corner and goes to its end point', () => {
+  checkRule(
+    notModelled,
+    {},
+    `
+G0 X10,R2
+      ^^^ not-modelled: ,R2 rounds or breaks the corner there, which this check does not follow.
+M30
+`,
+  );
+});
+
+test('flags an alarm that the program raises', () => {
+  checkRule(
+    notModelled,
+    { controller: { language: 'custom-macro' } },
+    `
+#3000=1 (NO TOOL)
+^^^^^^^ not-modelled: #3000 raises an alarm here, and nothing after it is carried out.
+`,
+  );
+});
+
+test('allows values that are worked out', () => {
+  checkRule(
+    notModelled,
+    {},
+    `
 #1=5
-^^^^ not-modelled: #1=5 sets a parameter, which this check does not follow.
+#<depth>=[#1/2]
+G0 X[1+2] Y#1 Z[0-#<depth>]
 M30
 `,
   );

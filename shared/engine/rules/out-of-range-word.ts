@@ -10,13 +10,53 @@ export const outOfRangeWord = defineRule({
   severity: 'stop',
   protects: 'The run from an alarm, or from a controller that rounds the value to something else.',
   explanation:
-    'F and S may not be negative; T, H, D and counts are whole numbers, within 0.0001 (NISTIR 6556, 3.2.2.1); a G code has at most one decimal, an M code none.',
+    'F and S may not be negative; T, H, D and counts are whole numbers, within 0.0001 (NISTIR 6556, 3.2.2.1); a G code has at most one decimal, an M code none. A value that is worked out has to come out as a number: nothing is divided by zero, no root taken of a negative number (3.2.2.3, 3.2.2.4).',
   examples: { bad: 'G21 G90 G54\nT1.5 M6\nM30', good: 'G21 G90 G54\nT1 M6\nM30' },
   word: (data) => {
     const what = text(data, 'what') || text(data, 'letter');
     const value = figure(data, 'value');
     const written = what.length > 1 ? what : `${what}${Number.isNaN(value) ? '' : value}`;
     switch (text(data, 'needs')) {
+      case 'division':
+        return {
+          message: `${written} divides by zero.`,
+          advice: 'Correct the value, or the parameters it is worked out from.',
+        };
+      case 'power':
+        return {
+          message: `${written} raises a negative number to a fraction.`,
+          advice: 'Correct the value, or the parameters it is worked out from.',
+        };
+      case 'domain':
+        return {
+          message: `${written} asks ${text(data, 'letter')} of a value it does not take.`,
+          advice: 'Correct the value, or the parameters it is worked out from.',
+        };
+      case 'too-large':
+        return {
+          message: `${written} comes out larger than any controller counts.`,
+          advice: 'Correct the value, or the parameters it is worked out from.',
+        };
+      case 'not-whole':
+        return {
+          message: `${written} names the parameter ${text(data, 'letter')}, and a parameter has a whole number.`,
+          advice: 'Write the number of the parameter that is meant.',
+        };
+      case 'parameter-number':
+        return {
+          message: `${written} names the parameter ${text(data, 'letter')}, which this controller does not have.`,
+          advice: 'Write the number of the parameter that is meant.',
+        };
+      case 'never-set':
+        return {
+          message: `${written} reads ${text(data, 'letter')}, which nothing has set before.`,
+          advice: 'Set it first, or state its starting value in the controller description.',
+        };
+      case 'read-only':
+        return {
+          message: `${written} sets #0, which is always empty.`,
+          advice: 'Set another variable.',
+        };
       case 'not-negative':
         return {
           message: `${written} is negative; ${text(data, 'letter')} has to be zero or more.`,
