@@ -100,6 +100,8 @@ export class ExpressionReader {
     const from = this.at++;
     const byte = this.peek();
     if (byte === LESS) {
+      // NISTIR 6556 knows parameters by number alone.
+      if (this.grammar.isStrict) return this.fail('named', from, this.at + 1);
       const name = this.name();
       return name === undefined
         ? undefined

@@ -1,5 +1,6 @@
 import { LETTER } from '../blocks/block';
 import { codeName } from '../blocks/code-groups';
+import { parameterKey, showParameter } from '../parameters/parameter-name';
 import type { DeclaredCode } from '../shop/setup';
 import type { Run } from './run';
 import { restoreState, saveState } from './saved-state';
@@ -36,9 +37,23 @@ function doDeed(run: Run, code: string, meaning: DeclaredCode): void {
   tell.deed({ code, does: meaning.does, place });
   if (meaning.does === 'save-state') saveState(run);
   else if (meaning.does === 'restore-state') restoreState(run);
+  else if (meaning.into !== undefined) noteInput(run, meaning.into, meaning);
   else if (meaning.does === 'set-current-tool') setCurrentTool(run, meaning);
   else if (meaning.does === 'coolant-off') machine.coolant.mist = machine.coolant.flood = false;
   else if (meaning.does === 'coolant-on') machine.coolant.flood = true;
+}
+
+/**
+ * What an input reads is not known before the run: nought or one, or the value that the setup names. Waiting
+ * gives that value, or the one that says that the time was up.
+ */
+function noteInput(run: Run, into: string, { does, when = 1, timeout }: DeclaredCode): void {
+  const key = parameterKey(into);
+  const values = does === 'wait-input' ? [when, timeout ?? when] : [0, 1, when];
+  const least = Math.min(...values);
+  const greatest = Math.max(...values);
+  const of = showParameter(key);
+  run.parameters.set(key, least === greatest ? least : { least, greatest, of });
 }
 
 /** The controller is told what the spindle holds; nothing moves. */

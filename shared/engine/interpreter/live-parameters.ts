@@ -24,7 +24,9 @@ const PROBE_TOUCHED = 5_070;
 
 /** The parameters of a walk, with the setup's starting values in place. */
 export function openParameters(read: Read, grammar: Grammar): ParameterStore {
-  const stated = new Map<ParameterKey, number>();
+  const stated = new Map<ParameterKey, number | undefined>();
+  for (const { into } of read.controller.codes)
+    if (into !== undefined) stated.set(parameterKey(into), undefined);
   const live = liveParameters(read, grammar);
   const declared = declaredParameters(read);
   for (const [name, value] of Object.entries(read.controller.parameters)) {

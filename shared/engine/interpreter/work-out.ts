@@ -147,7 +147,7 @@ function noteFailure(run: Run, { reason, what }: Failure, range: Range): void {
     to: words.start + range.to,
     facts: isSystem
       ? { what: textOf(run, range), reason: 'system-parameter' }
-      : { letter: what, what: textOf(run, range), value: NaN, needs: reason },
+      : { letter: what, what: textOf(run, range), needs: reason },
     // A setting that is not followed leaves the motion of its block as it is.
     voids: !isSystem,
   });

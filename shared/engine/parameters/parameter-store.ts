@@ -43,8 +43,11 @@ export class ParameterStore implements ParameterReader {
   constructor(
     private readonly grammar: Grammar,
     private readonly live: ReadonlyMap<ParameterKey, LiveParameter>,
-    /** Starting values from the setup; their numbers exist whatever the dialect says. */
-    private readonly stated: ReadonlyMap<ParameterKey, number>,
+    /**
+     * Starting values from the setup, and undefined for what it only says is there. All of them exist,
+     * whatever the dialect says.
+     */
+    private readonly stated: ReadonlyMap<ParameterKey, number | undefined>,
   ) {}
 
   read(number: number): Value | Failure {
@@ -68,7 +71,9 @@ export class ParameterStore implements ParameterReader {
   }
 
   exists(name: string): boolean {
-    return this.live.has(name) || this.namesOf(name).has(name) || this.stated.has(name);
+    return (
+      this.live.has(name) || this.namesOf(name).has(name) || this.stated.get(name) !== undefined
+    );
   }
 
   /** Stores a value; gives what is wrong when the parameter takes none. */

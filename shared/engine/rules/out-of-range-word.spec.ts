@@ -51,3 +51,40 @@ M30
 `,
   );
 });
+
+test('flags values that cannot be worked out', () => {
+  checkRule(
+    outOfRangeWord,
+    {},
+    `
+G0 X[1/0]
+   ^^^^^^ out-of-range-word: X[1/0] divides by zero.
+G0 Y SQRT[-1]
+   ^^^^^^^^^^ out-of-range-word: Y SQRT[-1] asks SQRT of a value it does not take.
+G0 X[[0-8]**0.5]
+   ^^^^^^^^^^^^^ out-of-range-word: X[[0-8]**0.5] raises a negative number to a fraction.
+G0 X[TAN[90]]
+   ^^^^^^^^^^ out-of-range-word: X[TAN[90]] comes out larger than any controller counts.
+#5400=1
+^^^^^^^ out-of-range-word: #5400=1 names the parameter #5400, which this controller does not have.
+#1.5=2
+^^^^^^ out-of-range-word: #1.5=2 names the parameter #1.5, and a parameter has a whole number.
+G0 Z#<depth>
+   ^^^^^^^^^ out-of-range-word: Z#<depth> reads #<depth>, which nothing has set before.
+M30
+`,
+  );
+});
+
+test('allows the same values where they can be worked out', () => {
+  checkRule(
+    outOfRangeWord,
+    {},
+    `
+#<depth>=[0-SQRT[4]]
+#5399=1
+G0 X[1/2] Y SQRT[1] Z#<depth>
+M30
+`,
+  );
+});

@@ -61,6 +61,8 @@ function describe(data: Parameters<typeof text>[0]): string {
       return `“${what}” is followed by no “=”, so it neither sets a parameter nor is a word.`;
     case 'misspelt-name':
       return `“${what}” is no parameter; a name begins behind “#<”, and “_” comes first inside it.`;
+    case 'named':
+      return `“${what}” begins a named parameter, which the published language does not know.`;
     case 'name-not-closed':
       return `The name “${what}” is not closed with “>”.`;
     case 'name-too-long':
