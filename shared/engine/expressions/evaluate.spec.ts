@@ -123,6 +123,11 @@ test.each([
   expect(work(text, { 5: 1 })).toMatchObject({ reason });
 });
 
+test('decimals are those of parseFloat, to the last bit', () => {
+  const decimals = ['0.1', '.3', '5.', '0.30000000000000004', '123456789.123456789', '00012.50'];
+  for (const text of decimals) expect(work(text)).toBe(Number.parseFloat(text));
+});
+
 describe('of a value within bounds', () => {
   const bounds = (least: number, greatest: number) => ({ least, greatest, of: '#5' });
   const over = (text: string, grammar = PUBLISHED) =>

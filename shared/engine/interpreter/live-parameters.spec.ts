@@ -82,6 +82,7 @@ describe('parameters that the setup declares', () => {
     ['T2 M6\nT3\nG53 X#500\nG53 X#501\nG53 X#502\nG53 X#503', ['2', '3', '2', '3']],
     // Setting it tells the controller what it holds.
     ['#500=4\nG53 X#500', ['4']],
+    ['#501=5\nG53 X#501', ['5']],
     // Nothing is known of an input but the two ways it may read.
     ['G53 X#1005', ['0', '1']],
     ['#1005=1', ['1 1-8 not-modelled system-parameter']],

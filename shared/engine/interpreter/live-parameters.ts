@@ -143,11 +143,21 @@ function declaredParameters(read: Read): Map<ParameterKey, LiveParameter> {
     (key) => (machine.held.known ? machine.held.number : anyTool(key)),
     (value) => {
       if (isBounds(value)) return 'unknown';
-      hold(read, wholeNumber(value ?? 0));
+      const number = wholeNumber(value ?? 0);
+      hold(read, number >= 0 ? number : null);
       return undefined;
     },
   );
-  put(controller.selectedTool, (key) => machine.selectedTool ?? anyTool(key));
+  put(
+    controller.selectedTool,
+    (key) => machine.selectedTool ?? anyTool(key),
+    (value) => {
+      if (isBounds(value)) return 'unknown';
+      const number = wholeNumber(value ?? 0);
+      machine.selectedTool = number >= 0 ? number : null;
+      return undefined;
+    },
+  );
   put(controller.currentPocket, (key) => {
     const { known, number } = machine.held;
     return known && number !== null ? pocketOf(read, number) : anyPocket(key);

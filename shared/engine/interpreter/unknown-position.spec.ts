@@ -72,7 +72,14 @@ describe('after a probing move the head is somewhere on its way', () => {
     },
   );
 
-  test('an arc from there is named', () => {
+  test('an arc at an unknown height is judged at both', () => {
+    expect(run('G38.2 Z-10\nG2 X10 I5').slice(1)).toEqual([
+      '3 arc X0 Y0 Z-10 → X10 Y0 Z-10 F100 xy centre 5,0 turn -180',
+      '3 arc X0 Y0 Z0 → X10 Y0 Z0 F100 xy centre 5,0 turn -180',
+    ]);
+  });
+
+  test('an arc from an unknown place in its plane is named', () => {
     expect(run('G38.2 X10\nG2 X20 I5')).toContain('3 1-10 not-modelled depends');
   });
 

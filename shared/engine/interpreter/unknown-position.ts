@@ -135,10 +135,25 @@ function movesAlong(run: Run, unknown: Unknown): boolean {
   }
   if (!hasWords) return once === 280 || once === 300;
   const code = block.hasGroup(GROUP.motion) ? block.codes[GROUP.motion]! : machine.motionCode;
-  // The circle of an arc hangs on both its ends, so the arcs at the bounds do not hold those between.
-  if (code === 20 || code === 30) tellDepends(run, unknown);
+  if ((code === 20 || code === 30) && isPlaneUnknown(run, unknown)) tellDepends(run, unknown);
   return true;
 }
+
+/**
+ * Whether an arc begins or ends at an unknown place of its plane. Its circle hangs on both ends, so that the
+ * arcs at the bounds do not hold those between; an unknown height alone only moves the whole arc.
+ */
+function isPlaneUnknown({ machine, block }: Run, { least, greatest, words }: Unknown): boolean {
+  const depth = DEPTH_AXES[machine.planeIndex];
+  return AXES.some((axis, index) => {
+    if (axis === depth || axis === 'a') return false;
+    const letter = AXIS_LETTERS[index];
+    const isNamed = words.some(({ word }) => block.words.letters[word] === letter);
+    return isNamed || least[axis] !== greatest[axis];
+  });
+}
+/** The axis across each plane, in the order of PLANES. */
+const DEPTH_AXES = ['z', 'y', 'x'] as const;
 
 function tellDepends(run: Run, { of }: Unknown): void {
   tellProblem(run, 'not-modelled', undefined, { what: '', reason: 'depends', of });

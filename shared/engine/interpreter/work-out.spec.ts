@@ -102,6 +102,40 @@ describe('in a macro dialect', () => {
   });
 });
 
+describe('what posted programs write (real programs, items 19 and 20)', () => {
+  test('variables in a plain program, with a rounded corner', () => {
+    const program = [
+      '#139=1(0=inner, 1=outer)',
+      '#140=26.00(Width Y-axis)',
+      '#143=40(a G number)',
+      '#144=0.125(Corner-radius)',
+      'G1G#143Y0D1F900',
+      'X#140,R#144',
+      'Y[#140/2]',
+    ].join('\n');
+    expect(run(program, MACRO)).toEqual([
+      '5 X0 Y0 Z0 F900',
+      '6 6-12 not-modelled corner',
+      '6 X26 Y0 Z0 F900',
+      '7 X26 Y13 Z0 F900',
+    ]);
+  });
+
+  test('a sign before a name, and a name that is misspelt', () => {
+    expect(run('#<gap>=0.1\nY[-#<gap>-2.1] X-#<gap>\nX#_<gap>\n')).toEqual([
+      '2 X-0.1 Y-2.2 Z0',
+      '3 2-9 unreadable-block misspelt-name',
+    ]);
+  });
+
+  test('a byte-order mark, CRLF, a comment outside ASCII and no last line end', () => {
+    expect(run('\uFEFF#1=5 (größe)\r\n(ø)X#1\r\n(😀) X[1/0]')).toEqual([
+      '2 X5 Y0 Z0',
+      '3 6-12 out-of-range-word X[1/0]',
+    ]);
+  });
+});
+
 describe('what is not known before the run', () => {
   test.each([
     // Only an axis can be taken to its bounds; anything else is named.
