@@ -19,6 +19,8 @@ export const COUNTS = {
   tokenPrograms: of(60, 3_000),
   /** Random expressions over bounds, each compared at eight points. */
   intervals: of(4_000, 400_000),
+  /** Random programs whose places are not known, each compared with four of those it may be. */
+  unknownPlaces: of(150, 10_000),
   /** Mutated statements that must neither crash nor hang their reader. */
   statements: of(6_000, 400_000),
   /** Mutated programs that must neither crash nor hang. */
