@@ -82,6 +82,8 @@ export function joinOperands(
   operators: readonly BinaryOperator[],
   grammar: Grammar,
 ): Expression {
+  if (operators.length === 1)
+    return { kind: 'binary', operator: operators[0]!, left: operands[0]!, right: operands[1]! };
   const hasComparison = operators.some((operator) => COMPARISONS.includes(operator));
   let values = operands;
   let signs = operators;

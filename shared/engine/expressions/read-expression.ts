@@ -179,7 +179,7 @@ export class ExpressionReader {
       exponent = line.text(end, this.at);
     }
     rare.noteBlanks(line, from, from, end);
-    const value = Number(sign + rare.withoutBlanks(line, from, end) + exponent);
+    const value = rare.decimalValue(line, from, end, sign, exponent);
     return Number.isFinite(value) ? { kind: 'number', value } : this.fail('too-large', from);
   }
 
@@ -237,7 +237,7 @@ export class ExpressionReader {
   }
 
   private operator(): BinaryOperator | undefined {
-    this.peek();
+    if (this.peek() === CLOSE) return undefined;
     const from = this.at;
     const operator = OPERATORS.find((each) => this.takesWord(each));
     if (operator && this.grammar.isStrict && COMPARISONS.includes(operator))
@@ -248,7 +248,8 @@ export class ExpressionReader {
   /** Passes over `word` if it stands here, blanks inside it and either case allowed. */
   private takesWord(word: string): boolean {
     const { bytes } = this.line;
-    let at = this.at;
+    let { at } = this;
+    if ((bytes[at]! & ~32) !== (word.charCodeAt(0) & ~32)) return false;
     for (let i = 0; i < word.length; i++) {
       while (rare.isBlank(bytes[at]!)) at++;
       const byte = bytes[at++]!;

@@ -54,17 +54,12 @@ export function readRestOfValue(line: LineWords, start: number, letter: number):
   if (end < 0) return readValueless(line, start, letter, at);
   at = end;
   let text = '';
-  let isExact = true;
   if (CONTINUES_NUMBER[bytes[at]!] === 1) {
     const rest = noteContinuation(line, start, at);
-    if (rest > at) isExact = false;
     text = bytes[at] === 46 || bytes[at] === 44 ? '' : line.text(at, rest);
     at = rest;
   }
-  const value =
-    isExact && end - first <= EXACT_DIGITS
-      ? exactValue(line, first, end, sign)
-      : Number(sign + withoutBlanks(line, first, end) + text);
+  const value = decimalValue(line, first, end, sign, text);
   noteOddities(line, { letter, start, first, end, value });
   putWord(line, letter, value, start, Math.max(end, text === '' ? end : at));
   return at;
@@ -86,6 +81,18 @@ export function endOfNumber(line: LineWords, at: number): number {
   }
 }
 
+/** A decimal as parseFloat has it, to the last bit; short ones without making a string. */
+export function decimalValue(
+  line: LineWords,
+  first: number,
+  end: number,
+  sign: string,
+  exponent: string,
+): number {
+  if (exponent === '' && end - first <= EXACT_DIGITS) return exactValue(line, first, end, sign);
+  return Number(sign + withoutBlanks(line, first, end) + exponent);
+}
+
 /** At most 15 digits, read as in the hot path but in doubles: mantissa and power of ten are both exact. */
 function exactValue(line: LineWords, first: number, end: number, sign: string): number {
   const { bytes } = line;
@@ -103,7 +110,7 @@ function exactValue(line: LineWords, first: number, end: number, sign: string): 
   return sign === '-' ? -value : value;
 }
 
-export function withoutBlanks(line: LineWords, first: number, end: number): string {
+function withoutBlanks(line: LineWords, first: number, end: number): string {
   let text = '';
   for (let at = first; at < end; at++)
     if (!isBlank(line.bytes[at]!)) text += String.fromCharCode(line.bytes[at]!);
