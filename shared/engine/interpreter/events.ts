@@ -219,7 +219,8 @@ export interface DwellEvent {
   readonly by: 'program' | 'cycle';
 }
 export interface StopEvent {
-  readonly code: 'M0' | 'M1' | 'M60';
+  /** The code as written; #3006 is how a macro dialect stops with a message. */
+  readonly code: 'M0' | 'M1' | 'M60' | '#3006';
   readonly place: Place;
 }
 export interface OffsetChangedEvent {

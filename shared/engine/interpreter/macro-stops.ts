@@ -22,7 +22,7 @@ export function raiseOrPause(
   const place = run.machine.place(words);
   // Nought raises nothing; a figure that is not known may.
   if (value === 0 || value === null) return true;
-  if (key === PAUSE) run.tell.stop({ code: 'M0', place });
+  if (key === PAUSE) run.tell.stop({ code: '#3006', place });
   else {
     const number = isBounds(value) ? null : value;
     run.tell.deed({ code: '#3000', does: 'alarm', place });

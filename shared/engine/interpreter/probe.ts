@@ -2,7 +2,7 @@ import { codeName } from '../blocks/code-groups';
 import type { Target } from './kept';
 import { moveStraight } from './motions';
 import { refuse, tellProblem, type Run } from './run';
-import { noteProbed, stopBetween } from './unknown-position';
+import { stopBetween } from './unknown-position';
 
 /** NISTIR 6556: a probing target lies at least this far away, mm (0.010 inch). */
 const SHORTEST_PROBE = 0.254;
@@ -29,5 +29,7 @@ export function probe(run: Run, code: number, target: Target, feed: number): voi
   moveStraight(run, 'probe', 'program', target, feed);
   motion.endUnknown = isUnknown;
   stopBetween(run, from, target);
-  noteProbed(run, code === 382 || code === 384);
+  // G38.2 and G38.4 raise an alarm when nothing is touched, so whatever comes after them was (common practice).
+  const mustTouch = code === 382 || code === 384;
+  run.probed.touched = mustTouch ? 1 : { least: 0, greatest: 1, of: '#5070' };
 }

@@ -54,6 +54,21 @@ describe('after a probing move the head is somewhere on its way', () => {
     ]);
   });
 
+  test('probing twice leaves what both may have reached', () => {
+    expect(run('G38.2 Z-10\nG91 G38.2 Z-10\nG90 G0 Z50\nX[#5063]').slice(-2)).toEqual([
+      '5 rapid X0 Y0 Z50 → X-20 Y0 Z50',
+      '5 rapid X0 Y0 Z50 → X0 Y0 Z50',
+    ]);
+  });
+
+  test.each([
+    ['G38.2', ['X1']],
+    ['G38.3', ['X0', 'X1']],
+  ])('whether %s touched is known if it had to', (code, ends) => {
+    const told = run(`${code} Z-10\nG0 Z20\nX#5070`).filter((text) => text.startsWith('4'));
+    expect(told.map((text) => /→ (X\S+)/.exec(text)![1])).toEqual(ends);
+  });
+
   test('where it stopped is a parameter within bounds (facts sheet 4.3)', () => {
     expect(run('G38.2 Z-10\nG0 Z20\nX[#5063]').slice(-2)).toEqual([
       '4 rapid X0 Y0 Z20 → X-10 Y0 Z20',

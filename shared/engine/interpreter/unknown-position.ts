@@ -1,7 +1,6 @@
 import { LETTER, letterBits } from '../blocks/block';
 import { GROUP } from '../blocks/code-groups';
 import type { Interval } from '../expressions/interval';
-import type { Value } from '../expressions/value';
 import type { Target } from './kept';
 import { standAt } from './motions';
 import { tellProblem, type Run } from './run';
@@ -49,12 +48,13 @@ export function forgetUnknownWords(run: Run): void {
   if (run.unknown && run.unknown.words.length > 0) settle(run, run.unknown);
 }
 
-/** The head stopped somewhere between two places: where a probing move began and its target. */
+/** A probing move stopped somewhere between where it began and its target, ends included. */
 export function stopBetween(run: Run, from: Target, to: Target): void {
   const least = pointOf(from);
   const greatest = pointOf(from);
   widen(least, greatest, to);
   settle(run, { least, greatest, words: [], of: 'where the probe stops' });
+  noteProbed(run);
 }
 
 /**
@@ -77,6 +77,7 @@ export function moveAtBounds(run: Run, unknown: Unknown, move: (run: Run) => voi
   const greatest = endless(-Infinity);
   let standing = first;
   let { of } = unknown;
+  let isProbed = false;
   motion.endUnknown = true;
   for (let corner = 0; corner < 1 << choices.length; corner++) {
     run.unknown = undefined;
@@ -88,6 +89,7 @@ export function moveAtBounds(run: Run, unknown: Unknown, move: (run: Run) => voi
     // Probing leaves bounds of its own.
     const reached = run.unknown as Unknown | undefined;
     if (reached) ({ of } = reached);
+    isProbed ||= reached !== undefined;
     widen(least, greatest, reached?.least ?? machine);
     widen(least, greatest, reached?.greatest ?? machine);
   }
@@ -96,6 +98,7 @@ export function moveAtBounds(run: Run, unknown: Unknown, move: (run: Run) => voi
   choices.forEach((choose) => choose(false));
   standAt(run, standing);
   settle(run, { least, greatest, words: [], of });
+  if (isProbed) noteProbed(run);
 }
 
 /** For each axis that is not known: puts its start and its word to the first of their bounds, or the other. */
@@ -177,17 +180,16 @@ function settle(run: Run, { least, greatest, of }: Unknown): void {
 const ROUNDING = 1e-9;
 
 /** Where probing stopped in program coordinates, for the parameters that hold it. */
-export function noteProbed(run: Run, mustTouch: boolean): void {
+function noteProbed(run: Run): void {
   const { machine, probed, unknown } = run;
   const base = { x: machine.baseX, y: machine.baseY, z: machine.baseZ, a: machine.baseA };
   AXES.forEach((axis, index) => {
     const unit = axis === 'a' ? 1 : machine.unit;
     const least = ((unknown?.least[axis] ?? machine[axis]) - base[axis]) / unit;
     const greatest = ((unknown?.greatest[axis] ?? machine[axis]) - base[axis]) / unit;
-    probed[axis] = valueBetween(least, greatest, `#${5061 + index}`);
+    const of = `#${FIRST_PROBED + index}`;
+    probed[axis] = least === greatest ? least : { least, greatest, of };
   });
-  probed.touched = mustTouch ? 1 : valueBetween(0, 1, '#5070');
 }
-
-const valueBetween = (least: number, greatest: number, of: string): Value =>
-  least === greatest ? least : { least, greatest, of };
+/** Facts sheet 4.3: the parameter of X; Y, Z and A follow. */
+const FIRST_PROBED = 5_061;

@@ -81,7 +81,7 @@ describe('in a macro dialect', () => {
     // 12.1.3: no brackets needed.
     ['#1=2\n#2=#1*3+1\nX#2', ['3 X7 Y0 Z0']],
     // 12.1.10.
-    ['#3006=1 (TURN THE PART)\nX1', ['1 stop M0', '2 X1 Y0 Z0']],
+    ['#3006=1 (TURN THE PART)\nX1', ['1 stop #3006', '2 X1 Y0 Z0']],
     [
       '#3000=1 (NO TOOL)\nX1',
       ['1 #3000 alarm', '1 1-8 not-modelled alarm', '2 1-3 text-after-end'],

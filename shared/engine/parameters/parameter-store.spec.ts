@@ -28,12 +28,19 @@ describe('in the published language', () => {
   });
 
   test('1 … 5399 exist and no others (facts sheet 10.4), but those the setup states', () => {
-    const store = open(PUBLISHED, { '#5400': 3 });
+    const store = open({ isMacro: false, isStrict: true }, { '#5400': 3 });
     expect(store.read(0)).toMatchObject({ reason: 'parameter-number' });
     expect(store.set(0, 1)).toMatchObject({ reason: 'parameter-number' });
     expect(store.read(5399)).toEqual(unknown('#5399'));
     expect(store.read(5400)).toBe(3);
     expect(store.set(5401, 1)).toEqual({ reason: 'parameter-number', what: '#5401' });
+  });
+
+  test('if not strict, numbers above are the controller’s own: not known, and not followed when set', () => {
+    const store = open(PUBLISHED);
+    expect(store.read(5420)).toEqual(unknown('#5420'));
+    expect(store.set(5420, 1)).toEqual({ reason: 'system', what: '#5420' });
+    expect(store.read(100_000)).toMatchObject({ reason: 'parameter-number' });
   });
 
   test('one that nobody set or stated is not known, because all are kept between runs (4.3)', () => {

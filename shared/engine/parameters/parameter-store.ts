@@ -23,7 +23,7 @@ const HIGHEST_PUBLISHED = 5_399;
 const MACRO_LOCALS = 33;
 const FIRST_COMMON = 100;
 const FIRST_SYSTEM = 1_000;
-const HIGHEST_MACRO = 99_999;
+const HIGHEST_ANYWHERE = 99_999;
 /** Facts sheet 12.2.2. */
 const SUBROUTINE_LOCALS = 30;
 
@@ -89,7 +89,8 @@ export class ParameterStore implements ParameterReader {
     }
     if (!this.hasNumber(key)) return outside(key);
     if (this.grammar.isMacro && key === 0) return { reason: 'read-only', what: '#0' };
-    if (this.grammar.isMacro && key >= FIRST_SYSTEM && !this.stated.has(key))
+    const firstSystem = this.grammar.isMacro ? FIRST_SYSTEM : HIGHEST_PUBLISHED + 1;
+    if (key >= firstSystem && !this.stated.has(key))
       return { reason: 'system', what: showParameter(key) };
     this.placeOf(key).set(key, value);
     return undefined;
@@ -138,9 +139,11 @@ export class ParameterStore implements ParameterReader {
 
   private hasNumber(number: number): boolean {
     if (this.stated.has(number)) return true;
-    if (!this.grammar.isMacro) return 1 <= number && number <= HIGHEST_PUBLISHED;
+    if (this.grammar.isStrict) return 1 <= number && number <= HIGHEST_PUBLISHED;
+    // Controllers of the published language number parameters of their own above its last.
+    if (!this.grammar.isMacro) return 1 <= number && number <= HIGHEST_ANYWHERE;
     const isLocal = 0 <= number && number <= MACRO_LOCALS;
-    return isLocal || (FIRST_COMMON <= number && number <= HIGHEST_MACRO);
+    return isLocal || (FIRST_COMMON <= number && number <= HIGHEST_ANYWHERE);
   }
 }
 

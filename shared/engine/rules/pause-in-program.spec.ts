@@ -18,6 +18,19 @@ M30
     );
   });
 
+  test('notes the stop with a message of a macro dialect', () => {
+    checkRule(
+      pauseInProgram,
+      { controller: { language: 'custom-macro' } },
+      `
+G21 G90 G54
+#3006=1 (TURN THE PART)
+^^^^^^^ pause-in-program (note, unattended stop): #3006 stops here until someone presses cycle start.
+M30
+`,
+    );
+  });
+
   test('only notes it where the shop allows pauses in unattended runs', () => {
     checkRule(
       pauseInProgram,

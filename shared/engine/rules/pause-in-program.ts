@@ -12,7 +12,7 @@ export const pauseInProgram = defineRule({
   protects:
     'An unattended run from standing still all night with the spindle or the extraction as they were.',
   explanation:
-    'M0 and M60 stop the program until someone presses cycle start. M1 does so only while the optional stop switch is on, so for an unattended run it is a hold: someone must see that the switch is off. Whether a person will be there cannot be told from the program. Where the shop allows pauses in unattended runs by policy, all of them are notes.',
+    'M0 and M60 stop the program until someone presses cycle start, and so does #3006=1 in a macro dialect. M1 does so only while the optional stop switch is on, so for an unattended run it is a hold: someone must see that the switch is off. Whether a person will be there cannot be told from the program. Where the shop allows pauses in unattended runs by policy, all of them are notes.',
   examples: { bad: 'G21 G90 G54\nM0\nM30', good: 'G21 G90 G54\nG4 P1\nM30' },
   word: (data) =>
     text(data, 'code') === 'M1'
