@@ -51,6 +51,13 @@ export const FAULTS: readonly Fault[] = [
     severity: 'stop',
   },
   {
+    rule: 'raises-alarm',
+    story: 'an alarm left in from trying out',
+    text: added('N125', '#3000=1 (TRY)'),
+    setup: MACRO_DIALECT,
+    severity: 'stop',
+  },
+  {
     rule: 'repeated-word',
     story: 'a word typed twice',
     text: changed('N40', 'N40 G0 X100 X100 Y100'),

@@ -37,10 +37,17 @@ function doDeed(run: Run, code: string, meaning: DeclaredCode): void {
   tell.deed({ code, does: meaning.does, place });
   if (meaning.does === 'save-state') saveState(run);
   else if (meaning.does === 'restore-state') restoreState(run);
+  else if (meaning.does === 'alarm') raiseAlarm(run);
   else if (meaning.into !== undefined) noteInput(run, meaning.into, meaning);
   else if (meaning.does === 'set-current-tool') setCurrentTool(run, meaning);
   else if (meaning.does === 'coolant-off') machine.coolant.mist = machine.coolant.flood = false;
   else if (meaning.does === 'coolant-on') machine.coolant.flood = true;
+}
+
+/** Nothing more of the program is carried out, nor of the block. */
+function raiseAlarm(run: Run): void {
+  run.endedBy = 'alarm';
+  run.refused = true;
 }
 
 /**

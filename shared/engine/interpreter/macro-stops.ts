@@ -1,7 +1,6 @@
-import { isBounds, type Value } from '../expressions/value';
+import type { Value } from '../expressions/value';
 import type { ParameterKey } from '../parameters/parameter-name';
 import type { Run } from './run';
-import { tellProblem } from './run';
 
 const ALARM = 3_000;
 const PAUSE = 3_006;
@@ -18,15 +17,12 @@ export function raiseOrPause(
   bytes: { readonly from: number; readonly to: number },
 ): boolean {
   if (!run.grammar.isMacro || (key !== ALARM && key !== PAUSE)) return false;
-  const words = { bytes: [bytes.from, bytes.to] } as const;
-  const place = run.machine.place(words);
+  const place = run.machine.place({ bytes: [bytes.from, bytes.to] });
   // Nought raises nothing; a figure that is not known may.
   if (value === 0 || value === null) return true;
   if (key === PAUSE) run.tell.stop({ code: '#3006', place });
   else {
-    const number = isBounds(value) ? null : value;
     run.tell.deed({ code: '#3000', does: 'alarm', place });
-    tellProblem(run, 'not-modelled', words, { what: '#3000', reason: 'alarm', number });
     run.endedBy = 'alarm';
   }
   return true;

@@ -241,7 +241,8 @@ export class Walk implements LineReader {
   }
 
   private tellTextAfter(): void {
-    if (this.isTextAfterTold || this.run.callsMade) return;
+    // What stands behind an alarm is not behind the program's end.
+    if (this.isTextAfterTold || this.run.callsMade || this.run.endedBy === 'alarm') return;
     this.isTextAfterTold = true;
     tellProblem(this.run, 'text-after-end', undefined, {});
   }

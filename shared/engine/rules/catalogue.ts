@@ -93,6 +93,7 @@ import { changeNotProven } from './change-not-proven';
 import { handWork } from './hand-work';
 import { pauseInProgram } from './pause-in-program';
 import { probeInProgram } from './probe-in-program';
+import { raisesAlarm } from './raises-alarm';
 import type { Rule } from './rule';
 
 /** Every rule, alphabetical within its group; one import line and one entry line a rule. */
@@ -111,6 +112,7 @@ export const RULES: readonly Rule[] = [
   notModelled,
   oddCharacters,
   outOfRangeWord,
+  raisesAlarm,
   repeatedWord,
   textAfterEnd,
   unreadableBlock,

@@ -38,17 +38,6 @@ M30
   );
 });
 
-test('flags an alarm that the program raises', () => {
-  checkRule(
-    notModelled,
-    { controller: { language: 'custom-macro' } },
-    `
-#3000=1 (NO TOOL)
-^^^^^^^ not-modelled: #3000 raises an alarm here, and nothing after it is carried out.
-`,
-  );
-});
-
 test('allows values that are worked out', () => {
   checkRule(
     notModelled,

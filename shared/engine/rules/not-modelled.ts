@@ -27,9 +27,7 @@ function describe(data: Parameters<typeof text>[0]): string {
     case 'depends':
       return `${what || 'This block'} depends on ${text(data, 'of')}, which is not known before the run.`;
     case 'system-parameter':
-      return `${what} sets a parameter of the controller itself, which this check does not follow.`;
-    case 'alarm':
-      return `${what} raises an alarm here, and nothing after it is carried out.`;
+      return `“${what}” sets a parameter of the controller itself, which this check does not follow.`;
     case 'corner':
       return `${what} rounds or breaks the corner there, which this check does not follow.`;
     case 'no-reference':
@@ -51,8 +49,6 @@ function advise(reason: string): string {
   if (reason === 'flow') return 'Post the program without jumps, or have a person prove this part.';
   if (reason === 'depends')
     return 'If it is a parameter, state its starting value in the controller description; else write the figure into the program, or have a person prove this part.';
-  if (reason === 'alarm')
-    return 'Take out what leads here, or run the program with a person there.';
   if (reason === 'call') return 'Post the program in one piece, or have a person prove this part.';
   if (reason === 'no-axis') return 'Post for a machine without that axis, or describe the axis.';
   if (reason === 'no-use') return 'Take the word out, or write the code it belongs to.';

@@ -66,9 +66,9 @@ G0 X[[0-8]**0.5]
 G0 X[TAN[90]]
    ^^^^^^^^^^ out-of-range-word: X[TAN[90]] comes out larger than any controller counts.
 #100000=1
-^^^^^^^^^ out-of-range-word: #100000=1 names the parameter #100000, which this controller does not have.
+^^^^^^^^^ out-of-range-word: “#100000=1” names the parameter #100000, which this controller does not have.
 #1.5=2
-^^^^^^ out-of-range-word: #1.5=2 names the parameter #1.5, and a parameter has a whole number.
+^^^^^^ out-of-range-word: “#1.5=2” names the parameter #1.5, and a parameter has a whole number.
 G0 Z#<depth>
    ^^^^^^^^^ out-of-range-word: Z#<depth> reads #<depth>, which nothing has set before.
 M30

@@ -15,7 +15,8 @@ export const outOfRangeWord = defineRule({
   word: (data) => {
     const what = text(data, 'what') || text(data, 'letter');
     const value = figure(data, 'value');
-    const written = what.length > 1 ? what : `${what}${Number.isNaN(value) ? '' : value}`;
+    const plain = what.length > 1 ? what : `${what}${Number.isNaN(value) ? '' : value}`;
+    const written = plain.startsWith('#') ? `“${plain}”` : plain;
     switch (text(data, 'needs')) {
       case 'division':
         return {

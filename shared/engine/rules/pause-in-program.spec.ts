@@ -25,7 +25,7 @@ M30
       `
 G21 G90 G54
 #3006=1 (TURN THE PART)
-^^^^^^^ pause-in-program (note, unattended stop): #3006 stops here until someone presses cycle start.
+^^^^^^^ pause-in-program (note, unattended stop): “#3006” stops here until someone presses cycle start.
 M30
 `,
     );

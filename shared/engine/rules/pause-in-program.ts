@@ -21,7 +21,7 @@ export const pauseInProgram = defineRule({
           advice: 'Optional stop must be off for an unattended run; look at the switch before it.',
         }
       : {
-          message: `${text(data, 'code')} stops here until someone presses cycle start.`,
+          message: `${named(text(data, 'code'))} stops here until someone presses cycle start.`,
           advice: 'Run it with a person there, or take the stop out of the program.',
         },
   observe: (shop, report) => {
@@ -34,3 +34,6 @@ export const pauseInProgram = defineRule({
     };
   },
 });
+
+/** A sentence does not begin with a number sign. */
+const named = (code: string): string => (code.startsWith('#') ? `“${code}”` : code);
