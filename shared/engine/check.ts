@@ -84,6 +84,7 @@ export function startCheck(setup: Setup, options: CheckOptions = {}): Check {
         lines: first.linesRead,
         blocks: first.blocks,
         firstSkippable: first.firstSkippable,
+        movesAtBounds: first.movesAtBounds,
       });
     },
   };

@@ -17,6 +17,7 @@ const PROGRAMS = [
   CLEAN_PROGRAM,
   '%\nO1\n/T1 M6\nG20 G91\nG2 X1 Y1 I.5 J.5 F9\nG18 G3 X2 Z1 R4\nG83 X1 Z-1 R.1 Q.2\nG80\nG53 G0 Z0\nG28 Z0\nM99',
   '#1=5\no100 sub\nG0 X#1\no100 endsub\no100 call [3]\nIF [#1 EQ 5] GOTO 10\nN10 G65 P100 A1\nM98 P1 L3\nM30\n',
+  'G21 G90\n#<a>=[SIN[30]*2] #2=[#<a>**2-1/3]\nM66 P1 L3 Q5\nG38.3 Z-5 F100\nG91 G0 X[#5399*#2] Y#5063\nG90 G53 G0 Z#501\n#5221=[#5221+#500] G54\nG2 X#1005 I[ATAN[1]/[#2]]\n#3006=1 #3000=#0\nM30\n',
 ].map((text) => new TextEncoder().encode(text));
 
 const SETUPS: readonly Setup[] = [
@@ -29,12 +30,16 @@ const SETUPS: readonly Setup[] = [
       toolWord: 'pocket',
       changeOn: 'T',
       lengthOffset: 'automatic',
+      currentTool: '#500',
+      selectedTool: '#501',
+      inputs: [{ parameter: '#1005', means: 'air-ok', when: 1 }],
       codes: [
         { code: 'M64', where: { P: 2 }, does: 'air-blast' },
         { code: 'G68', does: 'nothing' },
         { code: 'M98', does: 'save-state' },
         { code: 'M99', does: 'restore-state' },
         { code: 'M61', does: 'set-current-tool', from: 'Q' },
+        { code: 'M66', does: 'wait-input', input: 'tool-present', into: '#5399', timeout: -1 },
       ],
     },
     machine: { travel: { a: [-360, 360] }, changePoint: { x: 0, y: 0, z: 0 }, references: {} },

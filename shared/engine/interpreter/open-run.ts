@@ -45,6 +45,7 @@ export function openRun(shop: Shop, block: Block, observers: readonly Observer[]
     tell: new Broadcaster(observers, machine),
     lengths: new Map(Object.entries(offsets.length).map(([number, mm]) => [Number(number), mm])),
     unknown: undefined,
+    movesAtBounds: false,
     cycle: emptyCycle(),
     motion: emptyMotion(),
     target: { x: 0.5, y: 0.5, z: 0.5, a: 0.5 },

@@ -29,6 +29,8 @@ export interface Run {
   readonly probed: ProbeResult;
   /** What is not known of where the head is, and of the block's words; undefined while all is. */
   unknown: Unknown | undefined;
+  /** Whether any motion was carried out at such bounds. */
+  movesAtBounds: boolean;
   readonly cycle: CycleMemory;
   /** Scratch, so that motion allocates nothing. */
   readonly motion: Motion;

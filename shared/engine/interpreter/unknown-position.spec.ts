@@ -114,6 +114,21 @@ describe('a word within bounds', () => {
     expect(last).toEqual(['5 rapid X0 Y0 Z0 → X0 Y1 Z0', '5 rapid X4 Y0 Z0 → X4 Y1 Z0']);
   });
 
+  test('from an unknown place, every start meets every end', () => {
+    const moves = run('M66\nX[#5399*2]\nX[#5399*3]').slice(2);
+    expect(moves.map((text) => text.replace(/ Y0 Z0/g, ''))).toEqual([
+      '4 rapid X0 → X0',
+      '4 rapid X2 → X0',
+      '4 rapid X0 → X3',
+      '4 rapid X2 → X3',
+    ]);
+  });
+
+  test('that stands a hundred times is no more than one', () => {
+    const told = run(`M66\n${'X#5399'.repeat(100)}`);
+    expect(told.filter((text) => text.startsWith('3 rapid'))).toHaveLength(2);
+  });
+
   test('that sets an offset is named', () => {
     expect(run('M66\nG10 L2 P1 X#5399').at(-1)).toContain('not-modelled depends');
   });

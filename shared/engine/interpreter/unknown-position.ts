@@ -58,11 +58,11 @@ export function stopBetween(run: Run, from: Target, to: Target): void {
 }
 
 /**
- * Carries out the motion of a block that begins somewhere within bounds or goes somewhere within them. Every
- * axis of a motion depends on its own start and its own word alone, so the block is moved once from and to each
- * corner of the bounds: straight motions reach nothing beyond what those reach between them. The first one is
- * told as the motion of the block, the others as alternatives to it, and the head is left standing where the
- * first one ends.
+ * Carries out the motion of a block that begins somewhere within bounds or goes somewhere within them: once from
+ * and to each corner of the bounds. Each axis depends on its own start and its own word alone, so no motion
+ * reaches beyond those; what is smaller than the bounds may stand between them, and the report says so. The
+ * first one is told as the motion of the block, the others as alternatives to it, and the head is left standing
+ * where the first one ends.
  */
 export function moveAtBounds(run: Run, unknown: Unknown, move: (run: Run) => void): void {
   if (!movesAlong(run, unknown)) {
@@ -71,6 +71,7 @@ export function moveAtBounds(run: Run, unknown: Unknown, move: (run: Run) => voi
     return;
   }
   const { machine, motion } = run;
+  run.movesAtBounds = true;
   const choices = choicesOf(run, unknown);
   const first = pointOf(machine);
   const least = endless(Infinity);
@@ -101,27 +102,27 @@ export function moveAtBounds(run: Run, unknown: Unknown, move: (run: Run) => voi
   if (isProbed) noteProbed(run);
 }
 
-/** For each axis that is not known: puts its start and its word to the first of their bounds, or the other. */
-function choicesOf(run: Run, unknown: Unknown): ((isOther: boolean) => void)[] {
+type Choice = (isOther: boolean) => void;
+
+/** For each start and each word that is not known: puts it to the first of its bounds, or to the other. */
+function choicesOf(run: Run, unknown: Unknown): Choice[] {
   const { machine, block } = run;
-  const { values } = block.words;
-  return AXES.flatMap((axis, index) => {
-    const word = unknown.words.find(
-      (each) => block.words.letters[each.word] === AXIS_LETTERS[index],
-    );
+  const { wordOf } = block;
+  const { letters, values } = block.words;
+  const starts = AXES.flatMap((axis): Choice[] => {
     const least = unknown.least[axis];
     const greatest = unknown.greatest[axis];
-    if (!word && least === greatest) return [];
+    if (least === greatest) return [];
     const start = machine[axis];
-    const isAtLeast = start === least;
-    return [
-      (isOther: boolean) => {
-        const isLeast = isAtLeast !== isOther;
-        machine[axis] = isOther ? (isLeast ? least : greatest) : start;
-        if (word) values[word.word] = isLeast ? word.bounds.least : word.bounds.greatest;
-      },
-    ];
+    const other = start === least ? greatest : least;
+    return [(isOther) => (machine[axis] = isOther ? other : start)];
   });
+  // Of a letter that stands twice, the block goes by one word alone.
+  const counting = unknown.words.filter(({ word }) => wordOf[letters[word]!] === word);
+  const words = counting.map(({ word, bounds }): Choice => {
+    return (isOther) => (values[word] = isOther ? bounds.greatest : bounds.least);
+  });
+  return [...starts, ...words];
 }
 
 /** Whether the block moves at all; what would come out otherwise between the bounds than at them is told. */

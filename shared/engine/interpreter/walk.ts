@@ -53,6 +53,11 @@ export class Walk implements LineReader {
     this.longestBlock = shop.setup.controller.longestBlock;
   }
 
+  /** Whether some motion was carried out at the bounds of what is not known. */
+  get movesAtBounds(): boolean {
+    return this.run.movesAtBounds;
+  }
+
   push(bytes: Uint8Array): void {
     this.source.push(bytes);
   }

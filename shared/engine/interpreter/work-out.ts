@@ -14,7 +14,7 @@ import type { ParameterKey } from '../parameters/parameter-name';
 import type { ComputedWord, Setting, Statement } from '../statements/statement';
 import { raiseOrPause } from './macro-stops';
 import type { Run } from './run';
-import { noteUnknownWords, type WordBounds } from './unknown-position';
+import { forgetUnknownWords, noteUnknownWords, type WordBounds } from './unknown-position';
 
 const AXIS_WORDS = letterBits('XYZA');
 
@@ -32,7 +32,7 @@ export function workOut(run: Run, statement: Statement): void {
   const { words } = run.block;
   workOutWords(run, statement.words);
   const assigned = workOutSettings(run, statement.settings);
-  if (words.isVoid) return forget(run);
+  if (words.isVoid) return forgetUnknownWords(run);
   store(run, assigned);
 }
 
@@ -120,10 +120,6 @@ function store(run: Run, assigned: readonly Assigned[]): void {
     const failure = run.parameters.set(key, value);
     if (failure) noteFailure(run, failure, { from, to });
   }
-}
-
-function forget(run: Run): void {
-  if (run.unknown && run.unknown.words.length > 0) run.unknown = { ...run.unknown, words: [] };
 }
 
 function noteDepends(run: Run, range: Range, of: string): void {

@@ -19,12 +19,16 @@ const BY_HAND = 'Not seen: what a person does at the machine when a tool is chan
 const STOCK =
   'Not seen: where the stock lies, because the job sheet does not say; what needs it is judged by work zero on the top of the stock.';
 
-/** Whole sentences for every report; the setup decides which of the last ones apply. */
-export function blindSentences(setup: Setup): readonly string[] {
+const BETWEEN =
+  'Not seen: what stands between the bounds of a place that is only known within them before the run, such as where a probe stops; motion there is judged from and to its bounds.';
+
+/** Whole sentences for every report; the setup and the program decide which of the last ones apply. */
+export function blindSentences(setup: Setup, movesAtBounds = false): readonly string[] {
   const sentences = [...ALWAYS];
   if (setup.controller.rapids === 'independent') sentences.push(RAPIDS);
   if (setup.controller.toolChange === 'controller') sentences.push(CHANGE);
   if (setup.controller.toolChange === 'manual') sentences.push(BY_HAND);
   if (!setup.job?.stock) sentences.push(STOCK);
+  if (movesAtBounds) sentences.push(BETWEEN);
   return sentences;
 }

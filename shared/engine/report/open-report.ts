@@ -49,6 +49,8 @@ export interface ProgramRead {
   readonly blocks: number;
   /** The first block with a `/`, if there is one. */
   readonly firstSkippable?: Place | undefined;
+  /** Whether some motion was judged at the bounds of what is not known. */
+  readonly movesAtBounds?: boolean | undefined;
 }
 
 export function openReport(shop: Shop, rules: readonly Rule[]): ReportInProgress {
@@ -97,7 +99,7 @@ export function openReport(shop: Shop, rules: readonly Rule[]): ReportInProgress
           modelled: Math.max(0, read.blocks - coverage.count()),
         },
         dependsOn: summary.dependsOn,
-        blind: blindSentences(shop.setup),
+        blind: blindSentences(shop.setup, read.movesAtBounds),
       };
     },
   };
