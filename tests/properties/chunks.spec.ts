@@ -40,6 +40,8 @@ const debris = fc.constantFrom(
   'MO6',
   '\u00a0G0 X1',
   'O1000 (NAME)',
+  'G41 D2',
+  'G40',
 );
 const ends = fc.constantFrom('\n', '\r\n', '\r', '\n\n', '\r\r\n');
 const texts = fc

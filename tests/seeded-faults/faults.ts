@@ -212,14 +212,12 @@ export const FAULTS: readonly Fault[] = [
     story: 'a lead-in of 2 mm with a radius of 3 mm',
     text: added('N150', 'N151 G41 D4 G1 X42 F1000', 'N152 G40 X40'),
     severity: 'stop',
-    also: [`${lineOf('N150') + 1} not-modelled`],
   },
   {
     rule: 'diameter-offset-other-tool',
     story: 'D of another tool',
     text: added('N150', 'N151 G41 D2 G1 X60 F1000', 'N152 G40 X40'),
     severity: 'hold',
-    also: [`${lineOf('N150') + 1} not-modelled`],
   },
   {
     rule: 'machine-move-in-incremental',

@@ -55,6 +55,7 @@ const TRADE_G: Grouping = {
   cycle: [730],
   arcCentre: [901, 911],
   feedMode: [950],
+  compensation: [411, 421],
   length: [431],
   workOffset: [541],
   idle: [150, 500, 501, 670, 690, 691],

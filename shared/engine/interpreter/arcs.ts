@@ -1,20 +1,29 @@
 import { LETTER } from '../blocks/block';
+import { GROUP } from '../blocks/code-groups';
 import type { Motion } from './events';
 import { PLANES } from './machine';
 import type { Circle, Target } from './kept';
 import { standAt } from './motions';
 import { refuse, tellProblem, type Run } from './run';
+import { wholeNumber } from './whole-number';
 
-const { I, J, K, R } = LETTER;
+const { I, J, K, P, R } = LETTER;
 const TURN = 2 * Math.PI;
 const QUARTER = Math.PI / 2;
-/** NISTIR 6556: |R| may fall short of half the chord by this part of it, for rounding alone. */
+/**
+ * NISTIR 6556: |R| may fall short of half the chord by this part of it, for rounding alone. Posts round a
+ * semicircle to three decimals, so that other controllers allow their arc tolerance (common practice, no source).
+ */
 const CHORD_SLACK = 1e-12;
 /** NISTIR 6556 3.5.3.2: the two radii may differ by 0.002 mm, or 0.0002 inch. */
 const STRICT_TOLERANCE_MM = 0.002;
 const STRICT_TOLERANCE_INCH = 0.0002 * 25.4;
 /** Radii are compared after an addition and a root, so their last digits mean nothing. */
 const RADIUS_ROUNDING = 1e-9;
+
+/** More turns in one block are a slip of the pen. */
+const MOST_TURNS = 1_000;
+const OTHER_USES_OF_P = (1 << GROUP.once) | (1 << GROUP.path) | (1 << GROUP.workOffset);
 
 /** Sums of decimals part in their last digits; an end this close to the start is the start, mm. */
 const SAME_POINT = 1e-9;
@@ -31,7 +40,7 @@ const CENTRES = [
  * goes on from its stated end.
  */
 export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): void {
-  const { machine, motion } = run;
+  const { machine } = run;
   const index = machine.planeIndex;
   const fromU = index === 0 ? machine.x : index === 1 ? machine.z : machine.y;
   const fromV = index === 0 ? machine.y : index === 1 ? machine.x : machine.z;
@@ -39,13 +48,17 @@ export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): vo
   const toV = index === 0 ? to.y : index === 1 ? to.x : to.z;
   const circle = findCircle(run, turning, fromU, fromV, toU, toV);
   if (!circle) return standAt(run, to);
-  const startU = fromU - circle.u;
-  const startV = fromV - circle.v;
-  const endU = toU - circle.u;
-  const endV = toV - circle.v;
-  const isFull = Math.abs(toU - fromU) + Math.abs(toV - fromV) <= SAME_POINT;
-  const turn = isFull ? turning * TURN : findTurn(turning, startU, startV, endU, endV);
+  tellArc(run, to, circle, arcTurn(run, turning, circle, fromU, fromV, toU, toV), feed);
+}
 
+/** Moves along an arc that is known, tells it, and stands at its end; `turn` in radians, > 0 counterclockwise. */
+export function tellArc(run: Run, to: Target, circle: Circle, turn: number, feed: number): void {
+  const { machine, motion } = run;
+  const index = machine.planeIndex;
+  const startU = (index === 0 ? machine.x : index === 1 ? machine.z : machine.y) - circle.u;
+  const startV = (index === 0 ? machine.y : index === 1 ? machine.x : machine.z) - circle.v;
+  const endU = (index === 0 ? to.x : index === 1 ? to.z : to.y) - circle.u;
+  const endV = (index === 0 ? to.y : index === 1 ? to.x : to.z) - circle.v;
   motion.kind = 'arc';
   motion.by = 'program';
   motion.fromX = machine.x;
@@ -74,6 +87,41 @@ export function moveArc(run: Run, turning: 1 | -1, to: Target, feed: number): vo
   run.tell.motion(motion);
 }
 
+/** The angle from start to end on a circle, whole turns of a P word included; a full turn where they are one point. */
+export function arcTurn(
+  run: Run,
+  turning: 1 | -1,
+  circle: Circle,
+  fromU: number,
+  fromV: number,
+  toU: number,
+  toV: number,
+): number {
+  const isFull = Math.abs(toU - fromU) + Math.abs(toV - fromV) <= SAME_POINT;
+  const turn = isFull
+    ? turning * TURN
+    : findTurn(turning, fromU - circle.u, fromV - circle.v, toU - circle.u, toV - circle.v);
+  return run.block.has(P) && takesTurns(run) ? turn + turning * TURN * extraTurns(run) : turn;
+}
+
+/** Whether a P word beside an arc counts its turns: not in the published language, nor where P is of another code. */
+export function takesTurns({ block, controller, dialect }: Run): boolean {
+  if (dialect.isStrict || controller.language !== 'rs274ngc') return false;
+  return (block.groups & OTHER_USES_OF_P) === 0;
+}
+
+/** A P word counts the turns begun, so that P1 adds none to what the end point says (common practice, no source). */
+function extraTurns(run: Run): number {
+  const { block } = run;
+  const value = block.value(P);
+  const begun = wholeNumber(value);
+  if (begun >= 1 && begun <= MOST_TURNS) return begun - 1;
+  const what = block.written(block.wordOf[P]!);
+  const needs = Number.isNaN(begun) ? 'whole' : begun < 1 ? 'positive' : 'fewer';
+  tellProblem(run, 'out-of-range-word', { letters: 'P' }, { letter: 'P', what, value, needs });
+  return 0;
+}
+
 /** The angle from start to end in the direction of the arc, by one arc tangent of sine and cosine. */
 function findTurn(
   turning: 1 | -1,
@@ -87,7 +135,8 @@ function findTurn(
   return turn >= 0 ? turn - TURN : turn;
 }
 
-function findCircle(
+/** The circle of an arc as its words give it; undefined, and told, where they give none. */
+export function findCircle(
   run: Run,
   turning: 1 | -1,
   fromU: number,
@@ -135,21 +184,8 @@ function circleByCentre(
   toU: number,
   toV: number,
 ): Circle | undefined {
-  const { block, machine, circle } = run;
-  const letters = CENTRES[machine.planeIndex]!;
-  const { unit } = machine;
-  const wordU = block.has(letters.u) ? block.value(letters.u) * unit : 0;
-  const wordV = block.has(letters.v) ? block.value(letters.v) * unit : 0;
-  if (machine.isArcCentreAbsolute) {
-    const index = machine.planeIndex;
-    const zeroU = index === 0 ? machine.baseX : index === 1 ? machine.baseZ : machine.baseY;
-    const zeroV = index === 0 ? machine.baseY : index === 1 ? machine.baseX : machine.baseZ;
-    circle.u = block.has(letters.u) ? zeroU + wordU : fromU;
-    circle.v = block.has(letters.v) ? zeroV + wordV : fromV;
-  } else {
-    circle.u = fromU + wordU;
-    circle.v = fromV + wordV;
-  }
+  const { circle } = run;
+  if (!placeCentre(run, fromU, fromV)) return undefined;
   const start = distance(fromU - circle.u, fromV - circle.v);
   const end = distance(toU - circle.u, toV - circle.v);
   circle.radius = start;
@@ -174,7 +210,32 @@ function circleByCentre(
   return circle;
 }
 
-function arcTolerance(run: Run): number {
+/**
+ * Puts the centre of `circle` where the centre words say; false, and told, where they do not say it. Counted from
+ * program zero both are needed; counted from the start of the arc one left out is nought.
+ */
+export function placeCentre(run: Run, fromU: number, fromV: number): boolean {
+  const { block, machine, circle } = run;
+  const letters = CENTRES[machine.planeIndex]!;
+  const { unit } = machine;
+  const wordU = block.has(letters.u) ? block.value(letters.u) * unit : 0;
+  const wordV = block.has(letters.v) ? block.value(letters.v) * unit : 0;
+  if (!machine.isArcCentreAbsolute) {
+    circle.u = fromU + wordU;
+    circle.v = fromV + wordV;
+    return true;
+  }
+  if (!block.has(letters.u) || !block.has(letters.v)) {
+    tellProblem(run, 'arc-centre-missing', undefined, { plane: machine.plane, reason: 'one-word' });
+    return false;
+  }
+  const index = machine.planeIndex;
+  circle.u = wordU + (index === 0 ? machine.baseX : index === 1 ? machine.baseZ : machine.baseY);
+  circle.v = wordV + (index === 0 ? machine.baseY : index === 1 ? machine.baseX : machine.baseZ);
+  return true;
+}
+
+export function arcTolerance(run: Run): number {
   if (!run.controller.switches.strict) return run.controller.arcTolerance;
   return run.machine.unit === 1 ? STRICT_TOLERANCE_MM : STRICT_TOLERANCE_INCH;
 }
@@ -205,7 +266,8 @@ function circleByRadius(
   }
   const half = chord / 2;
   const size = Math.abs(radius);
-  if (size < half * (1 - CHORD_SLACK)) {
+  const slack = run.dialect.isStrict ? half * CHORD_SLACK : arcTolerance(run) + RADIUS_ROUNDING;
+  if (size < half - slack) {
     tellProblem(
       run,
       'arc-impossible',
@@ -224,7 +286,7 @@ function circleByRadius(
   const side = turning * Math.sign(radius);
   circle.u = fromU + du / 2 - (side * toCentre * dv) / chord;
   circle.v = fromV + dv / 2 + (side * toCentre * du) / chord;
-  circle.radius = size;
+  circle.radius = Math.max(size, half);
   return circle;
 }
 
@@ -252,6 +314,7 @@ function quartersPassed(
   // Back in the quarter it began in: either it never left, or it went all the way round.
   if (crossed === 0 && Math.abs(turn) > QUARTER) crossed = 4;
   let passed = 0;
+  if (Math.abs(turn) >= TURN) crossed = 4;
   for (let quarter = first + 1; quarter <= first + crossed; quarter++) passed |= 1 << (quarter & 3);
   return passed;
 }

@@ -1,11 +1,14 @@
 import { LETTER, letterBits } from '../blocks/block';
 import { GROUP, codeName } from '../blocks/code-groups';
 import { moveArc } from './arcs';
+import { moveBesidePath } from './compensation/move-beside-path';
+import { switchCompensation } from './compensation/switch-compensation';
 import { NO_CYCLE } from './cycle-words';
 import { drill, isCycle } from './cycles';
 import { doDeeds } from './declared-codes';
 import { dwell } from './dwell';
 import { endProgram, stopProgram } from './ends';
+import { feedOf } from './feed';
 import { NO_MOTION, SETTING } from './machine';
 import * as modal from './modal-words';
 import {
@@ -74,7 +77,7 @@ function carryOutPlain(run: Run): void {
 const SETTINGS: readonly (readonly [number, (run: Run) => void])[] = [
   [GROUP.plane, modal.applyPlane],
   [GROUP.units, modal.applyUnits],
-  [GROUP.compensation, modal.applyCompensation],
+  [GROUP.compensation, switchCompensation],
   [GROUP.length, applyLength],
   [GROUP.workOffset, applyWorkOffset],
   [GROUP.path, modal.applyPath],
@@ -166,6 +169,7 @@ function moveInProgram(run: Run): void {
   const named = namedAxes(block.seen);
   if ((machine.unsetAxes & named) !== 0 && machine.isAbsolute) tellIfUnset(run, named);
   run.motion.named = named;
+  if (machine.isOffset && moveBesidePath(run, code)) return;
   if (code === 10) return moveByWords(run, false, feedOf(run));
   if (code === 0) return moveByWords(run, true, NaN);
   if (isCycle(code)) return drill(run, code, feedOf(run));
@@ -201,6 +205,7 @@ function moveWithoutAxes(run: Run): void {
     });
   if (!isArc || (block.seen & CENTRE_BITS) === 0) return;
   run.motion.named = 0;
+  if (machine.isOffset && moveBesidePath(run, code)) return;
   moveArc(run, code === 20 ? -1 : 1, readTarget(run, run.target), feedOf(run));
 }
 
@@ -237,24 +242,6 @@ function moveInMachine(run: Run): void {
   const target = readMachineTarget(run, run.target);
   if (code === 0) moveStraight(run, 'rapid', 'machine', target, NaN);
   else moveStraight(run, 'feed', 'machine', target, feedOf(run));
-}
-
-/** Feed in mm/min, or the F word itself under G93; tells it once a block when there is none. */
-function feedOf(run: Run): number {
-  const { machine, block } = run;
-  if (machine.feedMode === 'inverse-time') {
-    if (!block.has(F)) {
-      tellProblem(run, 'cut-no-feed', undefined, {
-        reason: 'inverse-time',
-        code: machine.motionMode,
-      });
-      return NaN;
-    }
-    return machine.feed;
-  }
-  const feed = machine.feedMode === 'per-revolution' ? machine.feed * machine.speed : machine.feed;
-  if (!(feed > 0)) tellProblem(run, 'cut-no-feed', undefined, { code: machine.motionMode });
-  return feed;
 }
 
 function carryOutStop(run: Run): void {

@@ -52,6 +52,8 @@ export class Machine implements MachineState {
   returnTo: 'G98' | 'G99' = 'G98';
   motionCode = NO_MOTION;
   compensation: MachineState['compensation'] = 'off';
+  /** Whether the next XY move is not simply the one programmed: the cutter runs beside the path, or comes back to it. */
+  isOffset = false;
   workOffset = 'G54';
   originX: number | undefined = undefined;
   originY: number | undefined = undefined;

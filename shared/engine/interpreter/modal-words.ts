@@ -4,7 +4,6 @@ import type { SettableState } from './events';
 import { SETTING } from './machine';
 import { refuseWhileCompensating } from './one-block-codes';
 import { refuse, type Run } from './run';
-import { wholeNumber } from './whole-number';
 
 /** Steps of a block that only set a mode: no axis moves in any of them. */
 
@@ -84,10 +83,17 @@ export function applyCoolant(run: Run): void {
 export function applyPlane(run: Run): void {
   const { block, machine } = run;
   const index = block.codes[GROUP.plane]! / 10 - 17;
-  if (index !== 0 && refuseWhileCompensating(run, codeName('G', block.codes[GROUP.plane]!))) return;
+  if (index !== 0 && isRefused(run, codeName('G', block.codes[GROUP.plane]!))) return;
   const before = machine.plane;
   machine.planeIndex = index;
   setModal(run, 'plane', GROUP.plane, before, machine.plane);
+}
+
+/** A safety line cancels compensation in the block that sets the plane and the units (common practice, no source). */
+function isRefused(run: Run, what: string): boolean {
+  const { block, dialect } = run;
+  const cancels = block.hasGroup(GROUP.compensation) && block.codes[GROUP.compensation] === 400;
+  return !(cancels && !dialect.isStrict) && refuseWhileCompensating(run, what);
 }
 
 export const unitOf = (code: number): number => (code === 200 ? 25.4 : 1);
@@ -95,55 +101,11 @@ export const unitOf = (code: number): number => (code === 200 ? 25.4 : 1);
 export function applyUnits(run: Run): void {
   const { block, machine } = run;
   const code = block.codes[GROUP.units]!;
-  if (refuseWhileCompensating(run, codeName('G', code))) return;
   const before = machine.units;
+  const isRestated = unitOf(code) === machine.unit && !run.dialect.isStrict;
+  if (!isRestated && isRefused(run, codeName('G', code))) return;
   machine.unit = unitOf(code);
   setModal(run, 'units', GROUP.units, before, machine.units);
-}
-
-/** G40, G41, G42. The offset path itself is not worked out yet, and that is said at G41 and G42. */
-export function applyCompensation(run: Run): void {
-  const { block, machine } = run;
-  const code = block.codes[GROUP.compensation]!;
-  const name = codeName('G', code);
-  const side = code === 410 ? 'left' : code === 420 ? 'right' : 'off';
-  if (side !== 'off') {
-    if (run.dialect.isStrict && refuseWhileCompensating(run, name)) return;
-    if (machine.planeIndex !== 0)
-      return refuse(
-        run,
-        'compensation-entry',
-        { code: name },
-        { reason: 'plane', plane: machine.plane },
-      );
-  }
-  const number = side === 'off' ? null : readDiameterNumber(run);
-  if (run.refused) return;
-  setModal(run, 'compensation', GROUP.compensation, machine.compensation, side);
-  machine.compensation = side;
-  const place = machine.place({ letters: 'D', code: name });
-  if (side !== 'off') run.tell.problem({ problem: 'not-modelled', place, facts: { what: name } });
-  run.tell.compensation({ side, number, place });
-}
-
-function readDiameterNumber(run: Run): number | null {
-  const { block, shop } = run;
-  if (!block.has(LETTER.D)) return null;
-  const number = wholeNumber(block.value(LETTER.D));
-  if (!(number >= 0)) refuseNegative(run, LETTER.D);
-  else if (number !== 0 && shop.setup.offsets.diameter[String(number)] === undefined)
-    refuse(
-      run,
-      'out-of-range-word',
-      { letters: 'D' },
-      {
-        letter: 'D',
-        what: block.written(block.wordOf[LETTER.D]!),
-        value: number,
-        needs: 'in-table',
-      },
-    );
-  return number;
 }
 
 export function applyPath(run: Run): void {

@@ -1,5 +1,6 @@
 import { LETTER } from '../blocks/block';
 import { GROUP, codeName } from '../blocks/code-groups';
+import { calledAs } from '../shop/called-as';
 import { SETTING } from './machine';
 import { setModal } from './modal-words';
 import { placeProgramZero } from './program-zero';
@@ -49,7 +50,8 @@ export function applyLength(run: Run): void {
   }
   if (switches.lengthWithoutH === 'refused' || switches.strict)
     return refuse(run, 'missing-word', { code: 'G43' }, { code: 'G43', letter: 'H' });
-  const { number } = machine.held;
+  const held = machine.held.number;
+  const number = held ? (calledAs(run.shop, held) ?? held) : held;
   setLength(run, 'G43', number, number === null ? 0 : lengthInTable(run, number));
 }
 

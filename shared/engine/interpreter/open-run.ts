@@ -4,6 +4,7 @@ import type { BlockDialect } from '../blocks/parse-block';
 import type { Controller, DeclaredCode } from '../shop/setup';
 import type { Shop } from '../shop/shop';
 import { Broadcaster } from './broadcaster';
+import { noOffset } from './compensation/offset';
 import { emptyCycle } from './cycle-words';
 import type { Observer } from './events';
 import { hold } from './held-tool';
@@ -46,6 +47,7 @@ export function openRun(shop: Shop, block: Block, observers: readonly Observer[]
     lengths: new Map(Object.entries(offsets.length).map(([number, mm]) => [Number(number), mm])),
     unknown: undefined,
     movesAtBounds: false,
+    offset: noOffset(),
     cycle: emptyCycle(),
     motion: emptyMotion(),
     target: { x: 0.5, y: 0.5, z: 0.5, a: 0.5 },

@@ -1,10 +1,11 @@
-import type { Run } from './run';
+import { tellProblem, type Run } from './run';
 
 /** Works out anew where program zero lies, after any change of origin, shift or length. */
 export function placeProgramZero(run: Run): void {
   const { machine, offsets } = run;
   const { preset, local } = offsets;
   const origin = offsets.origin(machine.workOffset);
+  const { baseX, baseY } = machine;
   machine.originX = origin.x;
   machine.originY = origin.y;
   machine.originZ = origin.z;
@@ -20,4 +21,6 @@ export function placeProgramZero(run: Run): void {
       (origin.y === undefined ? 2 : 0) |
       (origin.z === undefined ? 4 : 0)) &
     ~offsets.presetAxes;
+  if (machine.compensation !== 'off' && (machine.baseX !== baseX || machine.baseY !== baseY))
+    tellProblem(run, 'compensation-entry', undefined, { reason: 'zero-moved' });
 }

@@ -7,6 +7,7 @@ import type { Shop } from '../shop/shop';
 import type { Broadcaster } from './broadcaster';
 import type { Motion, Place, Problem, Words } from './events';
 import type { Circle, CycleMemory, ProbeResult, SavedState, Target } from './kept';
+import type { Offset } from './compensation/offset';
 import type { Machine } from './machine';
 import type { Unknown } from './unknown-position';
 import type { WorkOffsets } from './work-offsets';
@@ -31,6 +32,8 @@ export interface Run {
   unknown: Unknown | undefined;
   /** Whether any motion was carried out at such bounds. */
   movesAtBounds: boolean;
+  /** Cutter compensation, where the machine `isOffset`. */
+  readonly offset: Offset;
   readonly cycle: CycleMemory;
   /** Scratch, so that motion allocates nothing. */
   readonly motion: Motion;

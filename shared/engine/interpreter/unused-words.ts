@@ -1,5 +1,6 @@
 import { LETTER, letterBits, letterName } from '../blocks/block';
 import { GROUP } from '../blocks/code-groups';
+import { takesTurns } from './arcs';
 import { tellProblem, type Run } from './run';
 import { isCycle } from './cycles';
 
@@ -23,6 +24,7 @@ export function checkUse(run: Run): void {
   if (code === 20 || code === 30) {
     unused &= ~CENTRES;
     if (unused === 0) return;
+    if (takesTurns(run)) unused &= ~(1 << LETTER.P);
   }
   // An unknown or declared code takes its words with it; the code itself is told if it is unknown.
   if (block.others.length > 0) unused &= FOREIGN & ~letterBits('EUVW');

@@ -1,9 +1,7 @@
-import { LIMIT_SLACK } from '../geometry/tolerance';
-import type { CompensationEvent, MachineState, Motion } from '../interpreter/events';
 import type { FindingData } from '../report/report';
-import type { Shop } from '../shop/shop';
 import { figure, text } from './finding-data';
-import { defineRule } from './rule';
+import { reportProblem } from './report-problem';
+import { defineRule, type LengthWords, type Wording } from './rule';
 
 /** Cutter compensation that cannot be started, ended or followed as written. */
 export const compensationEntry = defineRule({
@@ -13,84 +11,71 @@ export const compensationEntry = defineRule({
   severity: 'stop',
   protects: 'The work from a gouge at the lead-in, and the run from an alarm.',
   explanation:
-    'Compensation is switched on and off by a straight move, and switched on by one longer than the compensation value; an arc turned on its inside must be wider than it (NISTIR 6556, appendix B). The value taken is half the diameter in the offset table. Inside corners between straight lines are not judged: many controllers round them.',
+    'Compensation is switched on and off by a straight move longer than the compensation value; an arc turned on its inside must be wider than it, and straight moves at an inside corner long enough for the cutter to turn there (NISTIR 6556, appendix B). The value taken is half the diameter in the offset table. The published language refuses every inside corner, which counts where the controller is described as strict; other controllers turn there.',
   examples: {
     bad: 'G21 G90 G54 G17\nT2 M6\nG0 X0 Y0\nG41 D2\nG1 X1 F1000\nX50\nG40\nM30',
     good: 'G21 G90 G54 G17\nT2 M6\nG0 X0 Y0\nG41 D2\nG1 X10 F1000\nX50\nG40\nM30',
   },
-  word: (data, lengths) => ({
-    message: describe(data, lengths.length),
-    advice:
-      text(data, 'reason') === 'plane'
-        ? 'Select G17 before cutter compensation is switched on.'
-        : 'Lead in and out on a straight line longer than the compensation, or use a smaller cutter.',
-  }),
-  observe: (shop, report) => {
-    let side: CompensationEvent['side'] = 'off';
-    let isSwitching = false;
-    let radius = NaN;
-    return {
-      problem({ problem, place, facts }, state) {
-        if (problem !== 'compensation-entry') return;
-        report.found({ cause: String(facts['reason']), at: place, data: { ...facts } }, state);
-      },
-      compensation(event, state) {
-        isSwitching = event.side !== side;
-        side = event.side;
-        if (side !== 'off') radius = compensationRadius(shop, event.number, state);
-      },
-      motion(motion, state) {
-        if (side === 'off' && !isSwitching) return;
-        if (motion.fromX === motion.toX && motion.fromY === motion.toY && motion.kind !== 'arc')
-          return;
-        const fault = judgeMove(motion, side, isSwitching, radius);
-        isSwitching = false;
-        if (!fault) return;
-        const at = state.place({ letters: 'XYIJR' });
-        const cause = `${String(fault['reason'])} ${side}`;
-        report.found({ cause, by: radius, at, data: fault }, state);
-      },
-    };
-  },
+  word: wordReason,
+  observe: (_shop, report) =>
+    reportProblem(
+      report,
+      'compensation-entry',
+      // A lead-in and a lead-out that are too short are one slip.
+      (facts) => `${text(facts, 'reason').replace('leave-', '')} ${String(facts['side'] ?? '')}`,
+    ),
 });
 
-/** Half the diameter of the offset named, or of the held tool's own; NaN where it is not known. */
-function compensationRadius(shop: Shop, number: number | null, state: MachineState): number {
-  const { controller, offsets } = shop.setup;
-  if (number === 0) return 0;
-  const own = (state.held.number ?? NaN) + controller.diameterOffsetShift;
-  return Math.abs(offsets.diameter[String(number ?? own)] ?? NaN) / 2;
-}
+const LEAD =
+  'Lead in and out on a straight line longer than the compensation, or use a smaller cutter.';
 
-function judgeMove(
-  motion: Motion,
-  side: CompensationEvent['side'],
-  isSwitching: boolean,
-  radius: number,
-): FindingData | undefined {
-  const isArc = motion.kind === 'arc';
-  if (isSwitching && isArc) return { reason: 'arc', side };
-  if (side === 'off') return undefined;
-  if (isSwitching) {
-    const length = Math.hypot(motion.toX - motion.fromX, motion.toY - motion.fromY);
-    return length <= radius + LIMIT_SLACK ? { reason: 'short', length, radius } : undefined;
-  }
-  const isInside = isArc && motion.plane === 'xy' && motion.turn > 0 === (side === 'left');
-  return isInside && motion.radius <= radius + LIMIT_SLACK
-    ? { reason: 'tight', arc: motion.radius, radius }
-    : undefined;
-}
-
-function describe(data: FindingData, length: (mm: number) => string): string {
-  const by = length(figure(data, 'radius'));
+function wordReason(data: FindingData, { length }: LengthWords): Wording {
+  const lengthOf = (what: string): string => length(figure(data, what));
   switch (text(data, 'reason')) {
     case 'arc':
-      return `Cutter compensation is switched ${text(data, 'side') === 'off' ? 'off' : 'on'} on an arc.`;
+      return {
+        message: `Cutter compensation is switched ${text(data, 'side') === 'off' ? 'off' : 'on'} on an arc.`,
+        advice: LEAD,
+      };
     case 'short':
-      return `The move that switches compensation on is ${length(figure(data, 'length'))} long, no longer than the compensation of ${by}.`;
+      return {
+        message: `The move that switches compensation on is ${lengthOf('length')} long, no longer than the compensation of ${lengthOf('radius')}.`,
+        advice: LEAD,
+      };
+    case 'leave-short':
+      return {
+        message: `The move that ends compensation is ${lengthOf('length')} long, no longer than the compensation of ${lengthOf('radius')}: the cutter comes back over the edge it has cut.`,
+        advice: LEAD,
+      };
+    case 'no-move':
+      return {
+        message: 'Cutter compensation is switched off before any XY move has followed it.',
+        advice: 'Take it out, or write the lead-in between.',
+      };
     case 'tight':
-      return `An inside arc of radius ${length(figure(data, 'arc'))} is no wider than the compensation of ${by}.`;
+      return {
+        message: `An inside arc of radius ${lengthOf('arc')} is no wider than the compensation of ${lengthOf('radius')}.`,
+        advice: 'Use a smaller cutter, or open the arc.',
+      };
+    case 'corner':
+      return {
+        message: `An inside corner needs ${lengthOf('reach')} of each of its moves for the compensation of ${lengthOf('radius')}, and one of them has ${lengthOf('length')}.`,
+        advice: 'Use a smaller cutter, or take the small move out of the contour.',
+      };
+    case 'inside':
+      return {
+        message: `An inside corner with cutter compensation on, which this controller refuses.`,
+        advice: 'Round the corner by an arc wider than the cutter, or post the path of the centre.',
+      };
+    case 'zero-moved':
+      return {
+        message: 'Work zero is moved while cutter compensation is on, which distorts the path.',
+        advice: 'Cancel compensation before, and lead in anew after it.',
+      };
     default:
-      return 'Cutter compensation is switched on outside the XY plane.';
+      return {
+        message: 'Cutter compensation is switched on outside the XY plane.',
+        advice: 'Select G17 before cutter compensation is switched on.',
+      };
   }
 }

@@ -1,3 +1,4 @@
+import { ownDiameterNumber } from '../shop/called-as';
 import { figure } from './finding-data';
 import { defineRule } from './rule';
 
@@ -23,8 +24,8 @@ export const diameterOffsetOtherTool = defineRule({
     compensation({ side, number, place }, state) {
       const held = state.held.number;
       if (side === 'off' || number === null || number === 0 || !held) return;
-      const own = held + shop.setup.controller.diameterOffsetShift;
-      if (number === own) return;
+      const own = ownDiameterNumber(shop, held);
+      if (own === undefined || number === own) return;
       const data = { offset: number, tool: held, own };
       report.found({ cause: `D${number}`, at: place, data }, state);
     },

@@ -83,6 +83,16 @@ export const outOfRangeWord = defineRule({
           message: `${written} names an offset that the table does not hold.`,
           advice: 'Enter the offset, or write the number that is meant.',
         };
+      case 'own-diameter':
+        return {
+          message: `${written} takes D${figure(data, 'value')}, the diameter offset of the tool in the spindle, which the table does not hold.`,
+          advice: 'Enter the offset, or write the D number that is meant.',
+        };
+      case 'fewer':
+        return {
+          message: `${written} asks for more turns than any arc makes.`,
+          advice: 'Write how often the arc is to go round.',
+        };
       case 'pocket':
         return {
           message: `${written} names a pocket that the rack does not have.`,

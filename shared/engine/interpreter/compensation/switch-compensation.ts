@@ -1,0 +1,128 @@
+import { LETTER } from '../../blocks/block';
+import { GROUP, codeName } from '../../blocks/code-groups';
+import { ownDiameterNumber } from '../../shop/called-as';
+import type { MachineState } from '../events';
+import { refuseNegative, setModal } from '../modal-words';
+import { refuseWhileCompensating } from '../one-block-codes';
+import { refuse, tellProblem, type Run } from '../run';
+import { wholeNumber } from '../whole-number';
+
+const OFF = 400;
+/** G41.1 and G42.1: the D word is the diameter itself. */
+const BY_DIAMETER: readonly number[] = [411, 421];
+
+/** G40, G41, G42 and their .1 forms: no motion; the next XY move meets the offset. */
+export function switchCompensation(run: Run): void {
+  const code = run.block.codes[GROUP.compensation]!;
+  if (code === OFF) switchOff(run);
+  else switchOn(run, code);
+}
+
+function switchOff(run: Run): void {
+  const { machine, offset } = run;
+  if (machine.compensation !== 'off' && machine.isOffset) {
+    if (offset.isEntering)
+      tellProblem(run, 'compensation-entry', { code: 'G40' }, { reason: 'no-move' });
+    offset.isLeaving = machine.isOffset = !offset.isEntering;
+    offset.isLow = true;
+    offset.side = 0;
+  }
+  tellSide(run, 'off', null);
+}
+
+function switchOn(run: Run, code: number): void {
+  const { block, machine, offset } = run;
+  const name = codeName('G', code);
+  if (machine.planeIndex !== 0)
+    return refuse(
+      run,
+      'compensation-entry',
+      { code: name },
+      { reason: 'plane', plane: machine.plane },
+    );
+  const side = code < 420 ? 'left' : 'right';
+  const number = readNumber(run, code);
+  if (run.refused) return;
+  const diameter = BY_DIAMETER.includes(code)
+    ? block.value(LETTER.D) * machine.unit
+    : findDiameter(run, name, number);
+  const sign = (side === 'left' ? 1 : -1) * (diameter < 0 ? -1 : 1);
+  const radius = Math.abs(diameter) / 2;
+  const isRestated =
+    side === machine.compensation && (!machine.isOffset || offset.radius === radius);
+  if (isRestated && !run.dialect.isStrict) return tellSide(run, side, number);
+  // Macro-style controllers take a new side as a new entry; the published language refuses it.
+  const isRefused = run.dialect.isStrict || run.controller.language === 'rs274ngc';
+  if (isRefused && refuseWhileCompensating(run, name)) return;
+  if (!machine.isOffset) {
+    offset.x = machine.x;
+    offset.y = machine.y;
+  }
+  offset.toolX = machine.x;
+  offset.toolY = machine.y;
+  offset.side = sign === 1 ? 1 : -1;
+  offset.radius = radius;
+  offset.isEntering = true;
+  offset.isLeaving = false;
+  offset.room = NaN;
+  machine.isOffset = radius > 0;
+  tellSide(run, side, number);
+}
+
+function tellSide(run: Run, side: MachineState['compensation'], number: number | null): void {
+  const { block, machine } = run;
+  setModal(run, 'compensation', GROUP.compensation, machine.compensation, side);
+  machine.compensation = side;
+  const code = codeName('G', block.codes[GROUP.compensation]!);
+  run.tell.compensation({ side, number, place: machine.place({ letters: 'D', code }) });
+}
+
+/** The number of the diameter offset, null where none is written or D is no number; refuses what is none. */
+function readNumber(run: Run, code: number): number | null {
+  const { block } = run;
+  if (BY_DIAMETER.includes(code)) {
+    const name = codeName('G', code);
+    if (!block.has(LETTER.D))
+      refuse(run, 'missing-word', { code: name }, { code: name, letter: 'D' });
+    return null;
+  }
+  if (!block.has(LETTER.D)) return null;
+  const number = wholeNumber(block.value(LETTER.D));
+  if (!(number >= 0)) refuseNegative(run, LETTER.D);
+  return number;
+}
+
+/**
+ * The diameter in the offset table, mm: of the D number, or of the held tool's own. Where the table does not hold it
+ * that is told, and the path is followed at the radius of the held tool, or of the widest there is.
+ */
+function findDiameter(run: Run, name: string, number: number | null): number {
+  const { block, machine, shop } = run;
+  const { offsets, tools } = shop.setup;
+  if (number === 0) return 0;
+  const held = machine.held.number;
+  // With nothing in the spindle there is no number of its own, as with a tool that is not known.
+  const own = held ? ownDiameterNumber(shop, held) : undefined;
+  const diameter = offsets.diameter[String(number ?? own)];
+  if (diameter !== undefined) return diameter;
+  const facts = { letter: 'D', value: number ?? own ?? 0 };
+  if (number !== null) {
+    const what = block.written(block.wordOf[LETTER.D]!);
+    const tell = run.dialect.isStrict ? refuse : tellProblem;
+    tell(run, 'out-of-range-word', { letters: 'D' }, { ...facts, what, needs: 'in-table' });
+  } else if (own !== undefined)
+    tellProblem(
+      run,
+      'out-of-range-word',
+      { code: name },
+      { ...facts, what: name, needs: 'own-diameter' },
+    );
+  else
+    tellProblem(
+      run,
+      'not-modelled',
+      { code: name },
+      { what: name, reason: 'depends', of: 'which tool the spindle holds' },
+    );
+  return machine.held.tool?.diameter ?? Math.max(0, ...tools.map((tool) => tool.diameter));
+}
