@@ -21,6 +21,8 @@ export const COUNTS = {
   intervals: of(4_000, 400_000),
   /** Random programs whose places are not known, each compared with four of those it may be. */
   unknownPlaces: of(150, 10_000),
+  /** Programs whose reports are compared with and without quiet motion. */
+  quiet: of(120, 5_000),
   /** Mutated statements that must neither crash nor hang their reader. */
   statements: of(6_000, 400_000),
   /** Mutated programs that must neither crash nor hang. */

@@ -4,15 +4,17 @@ import { openReport } from './report/open-report';
 import type { Report } from './report/report';
 import { openSha256 } from './report/sha256';
 import { RULES } from './rules/catalogue';
-import type { Rule } from './rules/rule';
+import type { CutMemory, Rule } from './rules/rule';
 import type { Setup } from './shop/setup';
-import { openShop } from './shop/shop';
+import { openShop, type Shop } from './shop/shop';
 
 export interface CheckOptions {
-  /** Called beside the rules, on the walk that reads `/` blocks as run. */
-  readonly observers?: readonly Observer[] | undefined;
+  /** Opens what is called beside the rules, on the walk that reads `/` blocks as run; anew if that begins again. */
+  readonly observe?: (() => readonly Observer[]) | undefined;
   /** In place of the whole catalogue. */
   readonly rules?: readonly Rule[] | undefined;
+  /** For tests: every motion is told to every rule. */
+  readonly isAlwaysLoud?: boolean | undefined;
   /** False where the host works out the digest of the bytes itself and gives it to `report`. */
   readonly digests?: boolean | undefined;
   /** 'on': the controller's block-delete switch is on, so blocks with a `/` are skipped and never read as run. */
@@ -23,7 +25,7 @@ export interface CheckOptions {
 export interface Check {
   /** Any chunking of the program's bytes. */
   push(bytes: Uint8Array): void;
-  /** 'read-again': the program has `/` blocks; push all bytes once more, then call this again. */
+  /** 'read-again': push all bytes once more, then call this again; it may be asked for several times. */
   endOfText(): 'done' | 'read-again';
   /** Of the reading now going on. */
   readonly linesRead: number;
@@ -39,12 +41,10 @@ export interface ProgramName {
 
 export function startCheck(setup: Setup, options: CheckOptions = {}): Check {
   const shop = openShop(setup);
-  const gathering = openReport(shop, options.rules ?? RULES);
   const digest = options.digests === false ? undefined : openSha256();
-  const observers = [...gathering.observers, ...(options.observers ?? [])];
-  const skips = options.blockDelete === 'on';
-  const first = new Walk(shop, observers, { skips });
-  let current = first;
+  const cuts = { isKept: false, isWanted: false, want: () => void (cuts.isWanted = true) };
+  let reading = openReading(shop, options, cuts);
+  let isFirstTime = true;
   let bytes = 0;
   let bytesRead = 0;
   let isDone = false;
@@ -53,39 +53,59 @@ export function startCheck(setup: Setup, options: CheckOptions = {}): Check {
       if (isDone)
         throw new Error('The check has read the whole program; nothing more can be pushed.');
       bytesRead += chunk.length;
-      if (current === first) {
+      if (isFirstTime) {
         bytes += chunk.length;
         digest?.push(chunk);
       }
-      current.push(chunk);
+      if (!cuts.isWanted) reading.current.push(chunk);
     },
     endOfText() {
-      current.endOfText();
-      if (current === first && first.firstSkippable && !skips) {
-        current = new Walk(shop, gathering.openSecondWalk(), { skips: true });
-        bytesRead = 0;
-        return 'read-again';
+      bytesRead = 0;
+      isFirstTime = false;
+      if (!cuts.isWanted) isDone = reading.endOfText() === 'done';
+      // Only now it is known that the walk should have remembered where it cut: it all begins again.
+      if (cuts.isWanted) {
+        cuts.isWanted = false;
+        cuts.isKept = true;
+        isDone = false;
+        reading = openReading(shop, options, cuts);
       }
-      isDone = true;
-      return 'done';
+      return isDone ? 'done' : 'read-again';
     },
     get linesRead() {
-      return current.linesRead;
+      return reading.current.linesRead;
     },
     get bytesRead() {
       return bytesRead;
     },
     report({ name, sha256 }) {
       if (!isDone) throw new Error('The report is asked for before the end of the text.');
-      return gathering.finish({
-        name,
-        sha256: sha256 ?? digest?.hex() ?? '',
-        bytes,
-        lines: first.linesRead,
-        blocks: first.blocks,
-        firstSkippable: first.firstSkippable,
-        movesAtBounds: first.movesAtBounds,
-      });
+      return reading.finish({ name, sha256: sha256 ?? digest?.hex() ?? '', bytes });
+    },
+  };
+}
+
+/** One reading of the whole text, and a second one of it where there are `/` blocks. */
+function openReading(shop: Shop, options: CheckOptions, cuts: CutMemory) {
+  const gathering = openReport(shop, options.rules ?? RULES, cuts);
+  const observers = [...gathering.observers, ...(options.observe?.() ?? [])];
+  const skips = options.blockDelete === 'on';
+  const { isAlwaysLoud } = options;
+  const first = new Walk(shop, observers, { skips, isAlwaysLoud });
+  let current = first;
+  return {
+    get current() {
+      return current;
+    },
+    endOfText(): 'done' | 'read-again' {
+      current.endOfText();
+      if (current !== first || !first.firstSkippable || skips) return 'done';
+      current = new Walk(shop, gathering.openSecondWalk(), { skips: true, isAlwaysLoud });
+      return 'read-again';
+    },
+    finish(program: { readonly name: string; readonly sha256: string; readonly bytes: number }) {
+      const { linesRead: lines, blocks, firstSkippable, movesAtBounds } = first;
+      return gathering.finish({ ...program, lines, blocks, firstSkippable, movesAtBounds });
     },
   };
 }
@@ -98,11 +118,8 @@ export function checkProgram(
 ): Report {
   const bytes = typeof program === 'string' ? utf8(program) : program;
   const check = startCheck(setup);
-  check.push(bytes);
-  if (check.endOfText() === 'read-again') {
-    check.push(bytes);
-    check.endOfText();
-  }
+  do check.push(bytes);
+  while (check.endOfText() === 'read-again');
   return check.report({ name });
 }
 

@@ -19,11 +19,8 @@ function reportOf(bytes: Uint8Array, cuts: readonly number[]): Report {
     }
     check.push(bytes.subarray(from));
   };
-  pushAll();
-  if (check.endOfText() === 'read-again') {
-    pushAll();
-    check.endOfText();
-  }
+  do pushAll();
+  while (check.endOfText() === 'read-again');
   return check.report({ name: 'chunks.nc' });
 }
 

@@ -47,14 +47,15 @@ export function runRow(row: Row, setup: Setup): Ran {
     stop: ({ code }, now) => add(code === 'M1' ? 'optional_stop' : 'stop', code, now),
     lengthOffset: ({ after }, now) => add('tlo', after, now),
   };
+  const observe = () => {
+    motions.length = events.length = problems.length = 0;
+    return [observer];
+  };
   const bytes = new TextEncoder().encode(row.program);
   if (row.setup.blockDelete) observeSkipping(bytes, setup, observer);
-  const check = startCheck(setup, row.setup.blockDelete ? {} : { observers: [observer] });
-  check.push(bytes);
-  if (check.endOfText() === 'read-again') {
-    check.push(bytes);
-    check.endOfText();
-  }
+  const check = startCheck(setup, row.setup.blockDelete ? {} : { observe });
+  do check.push(bytes);
+  while (check.endOfText() === 'read-again');
   const { findings } = check.report({ name: row.id });
   return {
     motions,

@@ -1,6 +1,6 @@
 import { closeSync, openSync, writeSync } from 'node:fs';
 
-export type Kind = 'carve' | 'mixed';
+export type Kind = 'carve' | 'mixed' | 'flow';
 
 /** Bytes gathered before they are written. */
 const BATCH = 1 << 20;
@@ -11,13 +11,14 @@ const TOOLS = 8;
 /**
  * Writes a program of `lines` lines, the same on every machine. *carve* is a raster relief as posts write
  * it; *mixed* has line numbers, arcs, both kinds of comments, incremental stretches, three work offsets and
- * a tool change every 50,000 lines, with CRLF.
+ * a tool change every 50,000 lines, with CRLF; *flow* sets parameters, moves by expressions and calls a
+ * subprogram on every line in four.
  */
 export function writeProgram(path: string, kind: Kind, lines: number): void {
   const file = openSync(path, 'w');
   let batch = '';
   const end = kind === 'carve' ? '\n' : '\r\n';
-  const next = kind === 'carve' ? carveLines() : mixedLines();
+  const next = LINES_OF[kind]();
   for (let line = 0; line < lines; line++) {
     batch += (line === lines - 1 ? 'M30' : next(line)) + end;
     if (batch.length < BATCH) continue;
@@ -27,6 +28,12 @@ export function writeProgram(path: string, kind: Kind, lines: number): void {
   writeSync(file, batch);
   closeSync(file);
 }
+
+const LINES_OF: Readonly<Record<Kind, () => (line: number) => string>> = {
+  carve: carveLines,
+  mixed: mixedLines,
+  flow: flowLines,
+};
 
 /** Numerical Recipes' constants: any generator does, as long as it is the same everywhere. */
 function randomNumbers(): () => number {
@@ -116,5 +123,36 @@ function mixedLines(): (line: number) => string {
     if ((line - 2) % CHANGE_EVERY === 0) queue = ['G0 Z20.', ...change((line - 2) / CHANGE_EVERY)];
     if (queue.length === 0) queue = pattern();
     return `N${(line * 10) % 100_000} ${queue.shift()!}`;
+  };
+}
+
+const FLOW_HEAD = [
+  'o100 sub',
+  'G1 X[#1+SIN[#2]] Y[#2*0.5] F3000',
+  '#<depth>=[#<depth>+0.001]',
+  'o100 endsub',
+  '#<depth>=0',
+  'G21 G90 G17 G94',
+  'T4 M6',
+  'G54 G0 X0 Y0',
+  'G43 H4 Z20.',
+  'S18000 M3',
+  'G1 Z-1. F3000',
+];
+
+function flowLines(): (line: number) => string {
+  return (line) => {
+    if (line < FLOW_HEAD.length) return FLOW_HEAD[line]!;
+    const at = line % 400;
+    switch (line % 4) {
+      case 0:
+        return `#5=[${at}*0.25+COS[${at}]]`;
+      case 1:
+        return `G1 X#5 Y[#5/2+10]`;
+      case 2:
+        return `o100 call [#5] [${at}]`;
+      default:
+        return `G1 X[10+#5*2] Y${at / 4} Z[0-1-#5/1000]`;
+    }
   };
 }

@@ -170,17 +170,29 @@ function widenZ(out: MutableBounds, z: number): void {
   out.maxZ = Math.max(out.maxZ, z);
 }
 
-/** The direction (of length 1) in which an arc runs at its start (0) or end (1), its rise included. */
+/**
+ * The direction (of length 1) in which an arc runs at its start (0) or end (1), its rise included: at right
+ * angles to the line from its centre.
+ */
 export function arcTangent(path: Path, part: 0 | 1, out: MutablePoint): MutablePoint {
-  const u = path.plane === 'xy' ? 'x' : path.plane === 'zx' ? 'z' : 'y';
-  const v = path.plane === 'xy' ? 'y' : path.plane === 'zx' ? 'x' : 'z';
-  const w = path.plane === 'xy' ? 'z' : path.plane === 'zx' ? 'y' : 'x';
-  const rise = { x: path.toX - path.fromX, y: path.toY - path.fromY, z: path.toZ - path.fromZ }[w];
-  const angle = startAngle(path) + path.turn * part;
-  const around = path.radius * path.turn;
-  const length = Math.sqrt(around * around + rise * rise);
-  out[u] = (-Math.sin(angle) * around) / length;
-  out[v] = (Math.cos(angle) * around) / length;
-  out[w] = rise / length;
+  const x = part === 0 ? path.fromX : path.toX;
+  const y = part === 0 ? path.fromY : path.toY;
+  const z = part === 0 ? path.fromZ : path.toZ;
+  const around = Math.abs(path.radius * path.turn);
+  const sense = path.turn < 0 ? -1 : 1;
+  const { centreU, centreV, plane } = path;
+  const u = (plane === 'xy' ? x : plane === 'zx' ? z : y) - centreU;
+  const v = (plane === 'xy' ? y : plane === 'zx' ? x : z) - centreV;
+  const rise =
+    plane === 'xy'
+      ? path.toZ - path.fromZ
+      : plane === 'zx'
+        ? path.toY - path.fromY
+        : path.toX - path.fromX;
+  const flat = (sense * around) / Math.sqrt((u * u + v * v) * (around * around + rise * rise));
+  const up = rise / Math.sqrt(around * around + rise * rise);
+  out.x = plane === 'xy' ? -v * flat : plane === 'zx' ? u * flat : up;
+  out.y = plane === 'xy' ? u * flat : plane === 'zx' ? up : -v * flat;
+  out.z = plane === 'xy' ? up : plane === 'zx' ? -v * flat : u * flat;
   return out;
 }

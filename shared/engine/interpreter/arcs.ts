@@ -8,7 +8,7 @@ import { refuse, tellProblem, type Run } from './run';
 import { wholeNumber } from './whole-number';
 
 const { I, J, K, P, R } = LETTER;
-const TURN = 2 * Math.PI;
+export const TURN = 2 * Math.PI;
 const QUARTER = Math.PI / 2;
 /**
  * NISTIR 6556: |R| may fall short of half the chord by this part of it, for rounding alone. Posts round a
@@ -19,14 +19,14 @@ const CHORD_SLACK = 1e-12;
 const STRICT_TOLERANCE_MM = 0.002;
 const STRICT_TOLERANCE_INCH = 0.0002 * 25.4;
 /** Radii are compared after an addition and a root, so their last digits mean nothing. */
-const RADIUS_ROUNDING = 1e-9;
+export const RADIUS_ROUNDING = 1e-9;
 
 /** More turns in one block are a slip of the pen. */
 const MOST_TURNS = 1_000;
 const OTHER_USES_OF_P = (1 << GROUP.once) | (1 << GROUP.path) | (1 << GROUP.workOffset);
 
 /** Sums of decimals part in their last digits; an end this close to the start is the start, mm. */
-const SAME_POINT = 1e-9;
+export const SAME_POINT = 1e-9;
 
 /** Centre letters of each plane in plane order, the third that has no meaning there, and its axis letters. */
 const CENTRES = [
@@ -123,7 +123,7 @@ function extraTurns(run: Run): number {
 }
 
 /** The angle from start to end in the direction of the arc, by one arc tangent of sine and cosine. */
-function findTurn(
+export function findTurn(
   turning: 1 | -1,
   startU: number,
   startV: number,
@@ -300,7 +300,7 @@ function quarterOf(u: number, v: number): number {
  * Which of the four quadrant points an arc passes, bit 0 for the one on the positive first axis, bit 1 on
  * the positive second, and so on. An end that lies on one may count; it is an end of the arc anyway.
  */
-function quartersPassed(
+export function quartersPassed(
   turn: number,
   startU: number,
   startV: number,
@@ -320,7 +320,7 @@ function quartersPassed(
 }
 
 /** True extremes: both ends and every quadrant point that the arc passes. */
-function setExtremes(motion: Motion, index: number, passed: number): void {
+export function setExtremes(motion: Motion, index: number, passed: number): void {
   const { centreU, centreV, radius, fromX, fromY, fromZ, toX, toY, toZ } = motion;
   motion.minX = fromX < toX ? fromX : toX;
   motion.maxX = fromX < toX ? toX : fromX;

@@ -1,10 +1,12 @@
 import type * as events from './events';
+import { QuietWatch } from './quiet/quiet-watch';
 import { MotionCalls } from './motion-calls';
 
 type Listening<Kind extends keyof events.Observer> = Required<Pick<events.Observer, Kind>>;
 
 /** Passes each event to the observers that listen to its kind, in their order, and to no other. */
 export class Broadcaster {
+  readonly quiet: QuietWatch;
   private readonly blocks: readonly Listening<'block'>[];
   private readonly motions: MotionCalls;
   private readonly problems: readonly Listening<'problem'>[];
@@ -28,6 +30,7 @@ export class Broadcaster {
     observers: readonly events.Observer[],
     private readonly state: events.MachineState,
   ) {
+    this.quiet = new QuietWatch(observers, state);
     this.blocks = listening(observers, 'block');
     this.motions = new MotionCalls(observers, state);
     this.problems = listening(observers, 'problem');
@@ -60,6 +63,7 @@ export class Broadcaster {
     for (const each of this.blocks) each.block(this.state);
   }
   motion(motion: events.Motion): void {
+    this.quiet.noteLoud(motion);
     this.motions.tell(motion);
   }
   problem(event: events.ProblemEvent): void {
@@ -69,45 +73,60 @@ export class Broadcaster {
     for (const each of this.comments) each.comment(event, this.state);
   }
   toolSelected(event: events.ToolSelectedEvent): void {
+    this.quiet.ask();
     for (const each of this.selections) each.toolSelected(event, this.state);
   }
   toolChanging(event: events.ToolChangedEvent): void {
+    this.quiet.ask();
     for (const each of this.changings) each.toolChanging(event, this.state);
   }
   toolChanged(event: events.ToolChangedEvent): void {
+    this.quiet.ask();
     for (const each of this.changes) each.toolChanged(event, this.state);
   }
   spindle(event: events.SpindleEvent): void {
+    this.quiet.ask();
     for (const each of this.spindles) each.spindle(event, this.state);
   }
   dwell(event: events.DwellEvent): void {
+    this.quiet.ask();
     for (const each of this.dwells) each.dwell(event, this.state);
   }
   stop(event: events.StopEvent): void {
+    this.quiet.ask();
     for (const each of this.stops) each.stop(event, this.state);
   }
   offsetChanged(event: events.OffsetChangedEvent): void {
+    this.quiet.ask();
     for (const each of this.offsets) each.offsetChanged(event, this.state);
   }
   lengthOffset(event: events.LengthOffsetEvent): void {
+    this.quiet.ask();
     for (const each of this.lengths) each.lengthOffset(event, this.state);
   }
   compensation(event: events.CompensationEvent): void {
+    this.quiet.ask();
     for (const each of this.compensations) each.compensation(event, this.state);
   }
   localShift(event: events.LocalShiftEvent): void {
+    this.quiet.ask();
     for (const each of this.shifts) each.localShift(event, this.state);
   }
   modal(event: events.ModalEvent): void {
+    // G90 and G91 stand in the middle of what is quiet, and nothing depends on them there.
+    if (event.what !== 'distance') this.quiet.ask();
     for (const each of this.modals) each.modal(event, this.state);
   }
   coolant(event: events.CoolantEvent): void {
+    this.quiet.ask();
     for (const each of this.coolants) each.coolant(event, this.state);
   }
   deed(event: events.DeedEvent): void {
+    this.quiet.ask();
     for (const each of this.deeds) each.deed(event, this.state);
   }
   programEnd(event: events.ProgramEndEvent): void {
+    this.quiet.ask();
     for (const each of this.ends) each.programEnd(event, this.state);
   }
 }

@@ -1,3 +1,6 @@
+import type { Pace } from './quiet/pace';
+import type { Quiet } from './quiet/quiet';
+import type { Stretch } from './quiet/stretch';
 import type { Columns, Within } from '../report/report';
 import type { Tool } from '../shop/setup';
 
@@ -269,13 +272,20 @@ export interface ProgramEndEvent {
 
 /** What a rule may listen to. A rule that names `motion` is called for every motion: keep it cheap. */
 export interface Observer {
-  /** The kinds of motion `motion` is called for; all of them when absent. The rest costs nothing then. */
-  readonly motionKinds?: readonly Motion['kind'][] | undefined;
   /** Every block that held at least one word, after it was carried out. */
   block?(state: MachineState): void;
-  /** Whoever returns 'enough' is not called for a motion again in this walk. */
-  // eslint-disable-next-line @typescript-eslint/no-invalid-void-type -- observers that return nothing are the rule
-  motion?(motion: Motion, state: MachineState): void | 'enough';
+  motion?(motion: Motion, state: MachineState): void;
+  /**
+   * Narrows down the motion that `motion` need not be called for, for the state the machine is in now. An
+   * observer of motions without it is called for every one, and then none is quiet for the others either.
+   */
+  quiet?(quiet: Quiet, state: MachineState): void;
+  /** Every quiet motion all the same, for those who draw: it takes the place of `motion` there. */
+  quietMotion?(motion: Motion, state: MachineState): void;
+  /** Times feed motion and rapids; quiet ones it is told by the reader itself. */
+  readonly pace?: Pace;
+  /** Quiet motion that was not told one by one, for those who add up or gather where it goes. */
+  stretch?(stretch: Stretch, state: MachineState): void;
   problem?(event: ProblemEvent, state: MachineState): void;
   comment?(event: CommentEvent, state: MachineState): void;
   toolSelected?(event: ToolSelectedEvent, state: MachineState): void;

@@ -114,6 +114,14 @@ export class Machine implements MachineState {
     if (words.hasWide) this.noteWide(at, word);
   }
 
+  /** As noteSet, for bytes of a line that is not in the block: first and one past the last, counted from its start. */
+  noteSetAt(setting: number, line: number, from: number, to: number): void {
+    const at = setting * KEPT;
+    this.settings[at] = line;
+    this.settings[at + 1] = from + 1;
+    this.settings[at + 2] = to + 1;
+  }
+
   private noteWide(at: number, word: number): void {
     const { words } = this.block;
     const [from, to] = columnsOf(words, words.starts[word]!, words.ends[word]!);

@@ -84,7 +84,8 @@ export function readMachineTarget(run: Run, target: Target): Target {
 }
 
 /** Stands at the end of a motion that could not be worked out; nothing is told of the way there. */
-export function standAt({ machine }: Run, to: Target): void {
+export function standAt({ machine, tell }: Run, to: Target): void {
+  tell.quiet.ask();
   machine.x = to.x;
   machine.y = to.y;
   machine.z = to.z;

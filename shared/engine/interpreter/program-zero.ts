@@ -2,7 +2,8 @@ import { tellProblem, type Run } from './run';
 
 /** Works out anew where program zero lies, after any change of origin, shift or length. */
 export function placeProgramZero(run: Run): void {
-  const { machine, offsets } = run;
+  const { machine, offsets, tell } = run;
+  tell.quiet.ask();
   const { preset, local } = offsets;
   const origin = offsets.origin(machine.workOffset);
   const { baseX, baseY } = machine;

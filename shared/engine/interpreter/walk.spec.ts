@@ -82,7 +82,7 @@ describe('places', () => {
   function placesOf(program: string, letters: string): (Place | undefined)[] {
     const places: (Place | undefined)[] = [];
     const check = startCheck(testSetup(), {
-      observers: [{ block: (state) => places.push(state.place({ letters })) }],
+      observe: () => [{ block: (state) => places.push(state.place({ letters })) }],
     });
     check.push(new TextEncoder().encode(program));
     check.endOfText();
@@ -111,7 +111,7 @@ describe('places', () => {
   test('the place that set a state outlives its line', () => {
     const seen: unknown[] = [];
     const check = startCheck(testSetup(), {
-      observers: [
+      observe: () => [
         {
           programEnd: (_event, state) => {
             for (const what of ['distance', 'feed', 'units', 'motionMode', 'plane'] as const)

@@ -11,6 +11,7 @@ import { findDeclared } from './declared-codes';
 import { endProgram } from './ends';
 import type { Observer, Place } from './events';
 import { carryOut } from './interpreter';
+import { QuietLines } from './quiet/quiet-lines';
 import { openRun } from './open-run';
 import { tellProblem, type Run } from './run';
 import { carryOutUnknown } from './unknown-codes';
@@ -20,6 +21,8 @@ import { workOut } from './work-out';
 export interface WalkOptions {
   /** Whether blocks with a `/` in front are skipped. */
   readonly skips: boolean;
+  /** For tests: reads every line word by word and tells every motion. */
+  readonly isAlwaysLoud?: boolean | undefined;
 }
 
 /** One reading of a program: bytes in, events out. */
@@ -34,9 +37,13 @@ export class Walk implements LineReader {
   private readonly words = new LineWords();
   private readonly block = new Block(this.words);
   private readonly run: Run;
+  private readonly isAlwaysLoud: boolean;
   private readonly builtIn: ReturnType<typeof groupTables>;
   private readonly longestBlock: number;
+  private readonly quietLines: QuietLines;
   private isDone = false;
+  /** Whether a comment stood on a line of its own since the last block, which is told with the next. */
+  private isCommentWaiting = false;
   private isFramed = false;
   private isTextAfterTold = false;
   /** Whether any block said more than a number. */
@@ -49,6 +56,8 @@ export class Walk implements LineReader {
     private readonly options: WalkOptions,
   ) {
     this.run = openRun(shop, this.block, observers);
+    this.quietLines = new QuietLines(this.run, this.run.tell.quiet);
+    this.isAlwaysLoud = options.isAlwaysLoud === true;
     this.builtIn = groupTables(this.run.dialect.isStrict);
     this.longestBlock = shop.setup.controller.longestBlock;
   }
@@ -65,6 +74,7 @@ export class Walk implements LineReader {
   /** Tells what is only known once the text is over. */
   endOfText(): void {
     this.source.end();
+    this.run.tell.quiet.flush();
     const { run } = this;
     const { machine, tell, endedBy } = run;
     this.words.clear();
@@ -81,13 +91,34 @@ export class Walk implements LineReader {
   readLines(bytes: Uint8Array, at: number, end: number): void {
     const { words } = this;
     words.bytes = bytes;
+    this.quietLines.forget();
     while (at < end) {
+      if (!this.isLoud && this.quietLines.isOpen()) {
+        at = this.readQuietLines(bytes, at, end);
+        if (at >= end) break;
+      }
+      this.run.tell.quiet.flush();
       const next = readLine(bytes, at, words);
       this.linesRead++;
       if (words.end - at > LONGEST_LINE) this.tellOverlong(words.end - at);
       else this.takeLine();
       at = next;
     }
+  }
+
+  private readQuietLines(bytes: Uint8Array, at: number, end: number): number {
+    const { quietLines, linesRead } = this;
+    const next = quietLines.read(bytes, at, end, linesRead);
+    this.linesRead += quietLines.lines;
+    this.blocks += quietLines.blocks;
+    if (quietLines.lastWritten > 0) this.lastWritten = linesRead + quietLines.lastWritten;
+    if (quietLines.blocks > 0) this.isEmpty = false;
+    return next;
+  }
+
+  /** Whether the next line is to be read word by word whatever it holds: a block waits for it, or none may follow. */
+  private get isLoud(): boolean {
+    return this.isDone || this.isCommentWaiting || !this.words.ended || this.isAlwaysLoud;
   }
 
   readOverlong(_bytes: Uint8Array, length: number): void {
@@ -134,6 +165,7 @@ export class Walk implements LineReader {
     const { run } = this;
     carryOut(run);
     run.tell.block();
+    this.isCommentWaiting = false;
     if (run.endedBy !== '') this.isDone = true;
   }
 
@@ -144,7 +176,10 @@ export class Walk implements LineReader {
     if (words.comments.length > 0 && run.dialect.isStrict) refuseLineComments(words);
     const hasWords = words.count > 0 || words.faults.length > 0 || words.isStatement;
     if (hasWords) this.takeRareBlock(statement);
-    else if (words.comments.length > 0 && !this.isDone) this.tellComments();
+    else if (words.comments.length > 0 && !this.isDone) {
+      this.tellComments();
+      this.isCommentWaiting = true;
+    }
   }
 
   private takeRareBlock(statement: Statement | undefined): void {

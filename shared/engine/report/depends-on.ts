@@ -28,6 +28,13 @@ export function watchDependsOn(shop: Shop): Observer & { result(): Report['depen
       if (to > 0) tools.add(to);
       pairs.set(`${from} ${to}`, [from, to]);
     },
+    quiet({ feed, rapid }, state) {
+      const isNew = workOffset !== state.workOffset || (tools.size === 0 && state.held.number);
+      if (isNew) feed.close();
+      if (isNew) rapid.close();
+      feed.apartFrom(all, state.x, state.y, state.z);
+      rapid.apartFrom(all, state.x, state.y, state.z);
+    },
     motion(motion, state) {
       if (!motion.moves) return;
       if (workOffset !== state.workOffset && motion.by === 'program') {

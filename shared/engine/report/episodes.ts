@@ -1,5 +1,5 @@
 import type { MachineState, Observer, Place } from '../interpreter/events';
-import type { FindingDraft, Reporter, Rule } from '../rules/rule';
+import type { CutMemory, FindingDraft, Reporter, Rule } from '../rules/rule';
 import type { Setup } from '../shop/setup';
 import type { FindingData, Severity } from './report';
 import { roundData } from './rounding';
@@ -56,7 +56,7 @@ interface Entry {
   lastPlace: string;
 }
 
-export function openEpisodes(setup: Setup): EpisodeBook {
+export function openEpisodes(setup: Setup, cuts: CutMemory): EpisodeBook {
   const episodes: Episode[] = [];
   const folds = new Map<string, Fold>();
   const open = new Map<string, Entry>();
@@ -105,7 +105,7 @@ export function openEpisodes(setup: Setup): EpisodeBook {
         block += 1;
       },
     },
-    reporterFor: (rule) => ({ found: (draft, state) => found(rule, draft, state) }),
+    reporterFor: (rule) => ({ cuts, found: (draft, state) => found(rule, draft, state) }),
     gathered: () => ({ episodes, folds: [...folds.values()] }),
   };
 }

@@ -66,6 +66,13 @@ export function watchExtents(shop: Shop): Observer & { result(): Extents } {
     shiftZ = origin.z + tipDrop(state);
   };
   return {
+    quiet() {
+      // Where it goes is told by the stretch.
+    },
+    stretch(stretch, state) {
+      if (!isSame(state)) begin(state);
+      widen(bounds, stretch, 0, 0, 0);
+    },
     motion(motion, state) {
       if (motion.by === 'change' || !motion.moves) return;
       if (!isSame(state)) begin(state);

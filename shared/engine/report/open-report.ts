@@ -1,5 +1,5 @@
 import type { MachineState, Observer, Place } from '../interpreter/events';
-import type { FindingDraft, Rule } from '../rules/rule';
+import type { CutMemory, FindingDraft, Rule } from '../rules/rule';
 import type { Shop } from '../shop/shop';
 import { ENGINE_VERSION } from '../version';
 import { blindSentences } from './blind';
@@ -20,7 +20,7 @@ import { gatherWalkFacts } from './walk-facts';
  *
  * How a check uses it:
  *
- *     const gathering = openReport(shop, rules);
+ *     const gathering = openReport(shop, rules, cuts);
  *     walk(program, gathering.observers);                  // every `/` block read as run
  *     if (program has a `/` block)
  *       walk(program, gathering.openSecondWalk());         // every `/` block skipped
@@ -53,15 +53,15 @@ export interface ProgramRead {
   readonly movesAtBounds?: boolean | undefined;
 }
 
-export function openReport(shop: Shop, rules: readonly Rule[]): ReportInProgress {
-  const run = openWalk(shop, rules);
+export function openReport(shop: Shop, rules: readonly Rule[], cuts: CutMemory): ReportInProgress {
+  const run = openWalk(shop, rules, cuts);
   let skipped: Walk | undefined;
   const coverage = countLinesNotModelled();
   const summaries = gatherSummaries(shop);
   return {
     observers: [...run.before, coverage, ...summaries.observers, ...run.after],
     openSecondWalk() {
-      skipped = openWalk(shop, rules);
+      skipped = openWalk(shop, rules, cuts);
       return [...skipped.before, ...skipped.after];
     },
     finish(read) {
@@ -107,8 +107,8 @@ export function openReport(shop: Shop, rules: readonly Rule[]): ReportInProgress
 
 type Walk = ReturnType<typeof openWalk>;
 
-function openWalk(shop: Shop, rules: readonly Rule[]) {
-  const book = openEpisodes(shop.setup);
+function openWalk(shop: Shop, rules: readonly Rule[], cuts: CutMemory) {
+  const book = openEpisodes(shop.setup, cuts);
   const facts = gatherWalkFacts();
   const observers = rules.map((rule) => rule.observe(shop, book.reporterFor(rule)));
   return { book, facts, before: [book.closing, ...observers, facts], after: [book.counting] };

@@ -1,7 +1,5 @@
-import { travelSeconds } from '../geometry/kinematics';
-import { arcTangent, type MutablePoint } from '../geometry/path';
 import type { MachineState, Motion, Observer } from '../interpreter/events';
-import { findPathLimits, independentSeconds, type PathLimits } from '../shop/motion-seconds';
+import { Pace } from '../interpreter/quiet/pace';
 import type { Shop } from '../shop/shop';
 
 export interface Times {
@@ -16,38 +14,36 @@ export interface Times {
   readonly cuttingByTool: ReadonlyMap<number, number>;
 }
 
-/**
- * How long the program takes. Every motion speeds up, cruises and slows down as its axes allow. Under
- * exact stop (G61, G61.1), and for rapids, it begins and ends at rest. Blended (G64), a feed motion
- * hands over to the next at the part of the slower feed that points the new way: all of it straight on,
- * none at a right angle or sharper. What a controller looks ahead beyond one block is not modelled.
- */
+/** How long the program takes, and each tool in it; how fast the head goes is the business of its pace. */
 export function watchTimes(shop: Shop): Observer & { result(): Times } {
-  const { machine, controller } = shop.setup;
+  const { machine } = shop.setup;
   const sums = { cutting: 0, rapid: 0, changes: 0, dwell: 0, air: 0 };
   const cuttingByTool = new Map<number, number>();
-  const pending = new PendingFeed();
-  const limits: PathLimits = { speed: 0, acceleration: 0 };
-  const direction: MutablePoint = { x: 0, y: 0, z: 0 };
+  const pace = new Pace(shop.setup);
+  let isCutting = false;
+  let tool = -1;
   let speed = 0;
-  const settle = (leave: number) => {
-    const seconds = pending.settle(leave);
+  /** Puts down what the pace has timed to the tool and the spindle it was timed under. */
+  const book = () => {
+    const seconds = pace.takeFeedSeconds();
+    sums.rapid += pace.rapidSeconds;
+    pace.rapidSeconds = 0;
     if (seconds === 0) return;
-    if (!pending.isCutting) sums.air += seconds;
-    else {
+    if (isCutting) {
       sums.cutting += seconds;
-      cuttingByTool.set(pending.tool, (cuttingByTool.get(pending.tool) ?? 0) + seconds);
-    }
+      cuttingByTool.set(tool, (cuttingByTool.get(tool) ?? 0) + seconds);
+    } else sums.air += seconds;
   };
-  const rest = () => settle(0);
-  const follow = (motion: Motion, state: MachineState) => {
-    findPathLimits(motion, machine, limits);
-    startDirection(motion, direction);
-    const handed = state.path === 'G64' ? pending.handOver(direction, limits.speed) : 0;
-    settle(handed);
-    pending.begin(motion, limits, handed);
-    pending.isCutting = state.turning !== 'off';
-    pending.tool = state.held.number ?? -1;
+  const rest = () => {
+    pace.rest();
+    book();
+  };
+  const noteState = (state: MachineState) => {
+    const cuts = state.turning !== 'off';
+    const number = state.held.number ?? -1;
+    if (cuts !== isCutting || number !== tool) book();
+    isCutting = cuts;
+    tool = number;
   };
   const spinTo = (next: number) => {
     const needed = (machine.spindle.spinUp * (next - speed)) / machine.spindle.maxRpm;
@@ -55,16 +51,15 @@ export function watchTimes(shop: Shop): Observer & { result(): Times } {
     speed = next;
   };
   return {
+    pace,
+    // Quiet motion is timed where it is read, under the state in which it was asked for.
+    quiet(_quiet, state) {
+      noteState(state);
+    },
     motion(motion, state) {
       if (!motion.moves || motion.by === 'change' || motion.isAlternative) return;
-      if (motion.kind !== 'rapid') return follow(motion, state);
-      rest();
-      if (controller.rapids === 'independent') {
-        sums.rapid += independentSeconds(motion, machine);
-        return;
-      }
-      findPathLimits(motion, machine, limits);
-      sums.rapid += travelSeconds(motion.length, limits.acceleration, limits.speed, 0, 0);
+      noteState(state);
+      follow(pace, motion, state.path === 'G64');
     },
     dwell(event) {
       rest();
@@ -97,55 +92,11 @@ export function watchTimes(shop: Shop): Observer & { result(): Times } {
   };
 }
 
-/** The feed motion whose end is not timed yet, because the next one decides how fast it is left. */
-class PendingFeed {
-  isCutting = false;
-  tool = -1;
-  private isOpen = false;
-  private length = 0.5;
-  private enter = 0.5;
-  private speed = 0.5;
-  private acceleration = 0.5;
-  private readonly end: MutablePoint = { x: 0, y: 0, z: 0 };
-
-  begin(motion: Motion, limits: PathLimits, enter: number): void {
-    this.isOpen = true;
-    this.length = motion.length;
-    this.speed = limits.speed;
-    this.acceleration = limits.acceleration;
-    this.enter = Math.min(enter, limits.speed);
-    endDirection(motion, this.end);
-  }
-
-  /** Speed at which the next motion is entered: what points its way, and can be reached on this one. */
-  handOver(next: MutablePoint, nextSpeed: number): number {
-    if (!this.isOpen) return 0;
-    const { end } = this;
-    const along = end.x * next.x + end.y * next.y + end.z * next.z;
-    if (!(along > 0)) return 0;
-    const handed = Math.min(this.speed, nextSpeed) * Math.min(1, along);
-    const reached = this.enter * this.enter + 2 * this.acceleration * this.length;
-    return handed * handed <= reached ? handed : Math.sqrt(reached);
-  }
-
-  /** Seconds of the open motion, left at this speed; 0 when none is open. */
-  settle(leave: number): number {
-    if (!this.isOpen) return 0;
-    this.isOpen = false;
-    return travelSeconds(this.length, this.acceleration, this.speed, this.enter, leave);
-  }
-}
-
-function startDirection(motion: Motion, out: MutablePoint): void {
-  if (motion.kind === 'arc') arcTangent(motion, 0, out);
-  else straight(motion, out);
-}
-function endDirection(motion: Motion, out: MutablePoint): void {
-  if (motion.kind === 'arc') arcTangent(motion, 1, out);
-  else straight(motion, out);
-}
-function straight(motion: Motion, out: MutablePoint): void {
-  out.x = (motion.toX - motion.fromX) / motion.length;
-  out.y = (motion.toY - motion.fromY) / motion.length;
-  out.z = (motion.toZ - motion.fromZ) / motion.length;
+function follow(pace: Pace, motion: Motion, isBlended: boolean): void {
+  if (motion.kind === 'rapid') return pace.rapid(motion);
+  if (motion.kind === 'arc') return pace.followArc(motion, isBlended);
+  const dx = motion.toX - motion.fromX;
+  const dy = motion.toY - motion.fromY;
+  const dz = motion.toZ - motion.fromZ;
+  pace.followLine(dx, dy, dz, motion.length, motion.feed, isBlended);
 }

@@ -51,6 +51,15 @@ export function watchToolUse(
       const isSame = event.from.known && event.from.number === event.to;
       if (use && !isSame) use.changes += 1;
     },
+    quiet(quiet, state) {
+      if (!use && state.held.number) quiet.close();
+    },
+    stretch({ minZ, feedLength }, state) {
+      if (!use) return;
+      place(state);
+      use.lowest = Math.min(use.lowest, minZ - zeroOfTip);
+      if (state.turning !== 'off') use.cutLength += feedLength;
+    },
     motion(motion, state) {
       if (motion.by === 'change' || !motion.moves) return;
       if (!use) {

@@ -1,3 +1,4 @@
+import { ownGreatest, ownLeast } from '../geometry/path';
 import type { Observer, Place } from '../interpreter/events';
 import type { WalkFacts } from '../rules/rule';
 
@@ -14,17 +15,31 @@ export function gatherWalkFacts(): Observer & { facts(firstSkippable: Place): Wa
     toolChanged(event) {
       if (tools.length < KEPT_CHANGES) tools.push(event.to ?? -1);
     },
+    quiet() {
+      // Where it goes is told by the stretch.
+    },
+    stretch(stretch, state) {
+      min.x = Math.min(min.x, stretch.minX);
+      min.y = Math.min(min.y, stretch.minY);
+      min.z = Math.min(min.z, stretch.minZ);
+      max.x = Math.max(max.x, stretch.maxX);
+      max.y = Math.max(max.y, stretch.maxY);
+      max.z = Math.max(max.z, stretch.maxZ);
+      const tool = state.held.number ?? -1;
+      lowest[tool] = Math.min(lowest[tool] ?? Infinity, stretch.minZ);
+    },
     motion(motion, state) {
       if (motion.by === 'change' || !motion.moves) return;
-      if (motion.minX < min.x) min.x = motion.minX;
-      if (motion.minY < min.y) min.y = motion.minY;
-      if (motion.minZ < min.z) min.z = motion.minZ;
-      if (motion.maxX > max.x) max.x = motion.maxX;
-      if (motion.maxY > max.y) max.y = motion.maxY;
-      if (motion.maxZ > max.z) max.z = motion.maxZ;
+      const { fromX, toX, fromY, toY, fromZ, toZ } = motion;
+      const lowestZ = ownLeast(fromZ, toZ, motion.minZ);
+      min.x = Math.min(min.x, ownLeast(fromX, toX, motion.minX));
+      min.y = Math.min(min.y, ownLeast(fromY, toY, motion.minY));
+      min.z = Math.min(min.z, lowestZ);
+      max.x = Math.max(max.x, ownGreatest(fromX, toX, motion.maxX));
+      max.y = Math.max(max.y, ownGreatest(fromY, toY, motion.maxY));
+      max.z = Math.max(max.z, ownGreatest(fromZ, toZ, motion.maxZ));
       const tool = state.held.number ?? -1;
-      const before = lowest[tool];
-      if (before === undefined || motion.minZ < before) lowest[tool] = motion.minZ;
+      lowest[tool] = Math.min(lowest[tool] ?? Infinity, lowestZ);
     },
     facts: (firstSkippable) => ({
       firstSkippable,

@@ -20,6 +20,7 @@ interface Reaches {
 const X = 1;
 const Y = 2;
 const Z = 4;
+const ALL = X | Y | Z;
 
 /**
  * The values that each work offset may take so that every motion placed by it stays inside the travel:
@@ -36,6 +37,11 @@ export function watchWorkZeroWindow(shop: Shop): Observer & { result(): WorkZero
   let reaches: Reaches | undefined;
   let workOffset = '';
   let placed = 0;
+  /** Axes whose present coordinate is in `reaches` already, as long as the origin stays where it is. */
+  let counted = 0;
+  const origin = { x: NaN, y: NaN, z: NaN };
+  /** Where the last motion ended; a motion that could not be worked out moves the head untold. */
+  const last = { x: NaN, y: NaN, z: NaN };
   let isPreset = false;
   return {
     localShift({ code, withAxes }) {
@@ -45,7 +51,28 @@ export function watchWorkZeroWindow(shop: Shop): Observer & { result(): WorkZero
     toolChanged() {
       if (shop.setup.machine.changePoint) placed = 0;
     },
+    quiet(quiet, state) {
+      if (isPreset) return;
+      const isCounted =
+        counted === ALL && placed === ALL && isAt(origin, state) && isThere(last, state);
+      if (!isCounted || workOffset !== state.workOffset) quiet.close();
+    },
+    stretch(stretch, state) {
+      if (isPreset || !reaches) {
+        counted = 0;
+        return;
+      }
+      const { x, y, z } = reaches;
+      take(x, stretch.minX, stretch.maxX, state.originX ?? 0);
+      take(y, stretch.minY, stretch.maxY, state.originY ?? 0);
+      take(z, stretch.minZ, stretch.maxZ, state.originZ ?? 0);
+      standAt(last, state.x, state.y, state.z);
+    },
     motion(motion, state) {
+      const { fromX, fromY, fromZ } = motion;
+      if (fromX !== last.x || fromY !== last.y || fromZ !== last.z) counted = 0;
+      standAt(last, motion.toX, motion.toY, motion.toZ);
+      counted &= ~movedAxes(motion);
       if (motion.by !== 'program' && motion.by !== 'cycle') {
         placed &= ~(motion.named | movedAxes(motion));
         return;
@@ -56,9 +83,17 @@ export function watchWorkZeroWindow(shop: Shop): Observer & { result(): WorkZero
       if (!reaches || workOffset !== state.workOffset) {
         workOffset = state.workOffset;
         reaches = byOffset.get(workOffset) ?? emptyReaches();
+        counted = 0;
         byOffset.set(workOffset, reaches);
       }
       takeAxes(motion, state, axes, reaches);
+      if (!isAt(origin, state)) {
+        counted = 0;
+        origin.x = state.originX ?? 0;
+        origin.y = state.originY ?? 0;
+        origin.z = state.originZ ?? 0;
+      }
+      counted |= axes;
     },
     result: () =>
       Object.fromEntries(
@@ -79,24 +114,43 @@ function movedAxes(motion: Motion): number {
 }
 
 function takeAxes(motion: Motion, state: MachineState, axes: number, reaches: Reaches): void {
+  const { fromX, toX, fromY, toY, fromZ, toZ, minX, maxX, minY, maxY, minZ, maxZ } = motion;
   if (axes & X)
-    take(reaches.x, motion.fromX, motion.toX, motion.minX, motion.maxX, state.originX ?? 0);
+    take(reaches.x, ownLeast(fromX, toX, minX), ownGreatest(fromX, toX, maxX), state.originX ?? 0);
   if (axes & Y)
-    take(reaches.y, motion.fromY, motion.toY, motion.minY, motion.maxY, state.originY ?? 0);
+    take(reaches.y, ownLeast(fromY, toY, minY), ownGreatest(fromY, toY, maxY), state.originY ?? 0);
   if (axes & Z)
-    take(reaches.z, motion.fromZ, motion.toZ, motion.minZ, motion.maxZ, state.originZ ?? 0);
+    take(reaches.z, ownLeast(fromZ, toZ, minZ), ownGreatest(fromZ, toZ, maxZ), state.originZ ?? 0);
 }
 
-function take(
-  reach: Reach,
-  from: number,
-  to: number,
-  least: number,
-  greatest: number,
-  origin: number,
-): void {
-  const low = ownLeast(from, to, least) - origin;
-  const high = ownGreatest(from, to, greatest) - origin;
+function isAt(
+  origin: { readonly x: number; readonly y: number; readonly z: number },
+  state: MachineState,
+): boolean {
+  return (
+    origin.x === (state.originX ?? 0) &&
+    origin.y === (state.originY ?? 0) &&
+    origin.z === (state.originZ ?? 0)
+  );
+}
+
+interface Point {
+  x: number;
+  y: number;
+  z: number;
+}
+function isThere(point: Point, { x, y, z }: MachineState): boolean {
+  return point.x === x && point.y === y && point.z === z;
+}
+function standAt(point: Point, x: number, y: number, z: number): void {
+  point.x = x;
+  point.y = y;
+  point.z = z;
+}
+
+function take(reach: Reach, least: number, greatest: number, origin: number): void {
+  const low = least - origin;
+  const high = greatest - origin;
   if (low < reach.least) reach.least = low;
   if (high > reach.greatest) reach.greatest = high;
 }

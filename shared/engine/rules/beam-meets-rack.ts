@@ -1,4 +1,5 @@
-import { pairUp, worstContact, type Meetings } from '../shop/meetings';
+import type { MachineState } from '../interpreter/events';
+import { pairUp, worstContact, type Meetings, keepApart } from '../shop/meetings';
 import type { Shop } from '../shop/shop';
 import { bodySolids, parkedSolids, rackSolids } from '../shop/solids';
 import { contactCause, contactData, wordClearing, wordMoving, wordStanding } from './contact-words';
@@ -38,14 +39,20 @@ export const beamMeetsRack = defineRule({
     if (moving.length === 0) return {};
     let held: number | null = null;
     let meetings = pairWith(shop, held);
+    const meetingsWith = (state: MachineState) => {
+      if (state.held.number !== held) {
+        held = state.held.number;
+        meetings = pairWith(shop, held);
+      }
+      return meetings;
+    };
     return {
+      quiet(quiet, state) {
+        keepApart(quiet.rooms, meetingsWith(state), state);
+      },
       motion(motion, state) {
         if (motion.by === 'change') return;
-        if (state.held.number !== held) {
-          held = state.held.number;
-          meetings = pairWith(shop, held);
-        }
-        const contact = worstContact(motion, meetings, false);
+        const contact = worstContact(motion, meetingsWith(state), false);
         if (!contact || !isPlaced(motion, state)) return;
         report.found(
           {

@@ -43,6 +43,10 @@ export const beyondTravel = defineRule({
       );
     };
     return {
+      quiet(quiet) {
+        quiet.feed.within(travel);
+        quiet.rapid.within(travel);
+      },
       motion(motion, state) {
         if (
           lowX <= motion.minX &&

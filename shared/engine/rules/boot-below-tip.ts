@@ -49,6 +49,11 @@ export const bootBelowTip = defineRule({
       toolChanged() {
         judged = null;
       },
+      quiet({ feed }, state) {
+        const { tool } = state.held;
+        if (tool && judged !== tool.number && state.turning !== 'off')
+          material.keepClear(feed, state);
+      },
       motion(motion, state) {
         const { tool } = state.held;
         if (!tool || judged === tool.number || state.turning === 'off') return;

@@ -31,6 +31,10 @@ export const chipLoad = defineRule({
     const material = new Material(shop);
     const span = openSpan();
     return {
+      // What is asked of every motion here is its feed, so none in the stock is quiet.
+      quiet({ feed }, state) {
+        material.keepClear(feed, state);
+      },
       motion(motion, state) {
         const { tool } = state.held;
         if (motion.kind !== 'feed' || !tool?.flutes || motion.fromZ !== motion.toZ) return;

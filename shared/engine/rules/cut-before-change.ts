@@ -29,6 +29,9 @@ export const cutBeforeChange = defineRule({
   observe: (_shop, report) => {
     let isDone = false;
     return {
+      quiet({ feed }) {
+        if (!isDone) feed.close();
+      },
       motion(motion, state) {
         if (isDone || !cuts(motion)) return;
         isDone = true;

@@ -1,6 +1,7 @@
 import { LowestGrid } from '../geometry/lowest-grid';
 import type { Span } from '../geometry/span';
 import type { MachineState, Motion } from '../interpreter/events';
+import type { CutMemory } from './rule';
 import type { Material } from '../shop/material';
 import type { Shop } from '../shop/shop';
 import { tipDrop } from '../shop/work-frames';
@@ -20,10 +21,20 @@ export interface CutRecord {
   isCut(motion: Motion, state: MachineState, part: Span): boolean;
 }
 
-export function openCutRecord(shop: Shop, material: Material): CutRecord {
+export function openCutRecord(shop: Shop, material: Material, cuts: CutMemory): CutRecord {
   const { x, y } = shop.setup.machine.travel;
   const grid = new LowestGrid(x[0], y[0], x[1], y[1]);
   const radius = (state: MachineState) => (state.held.tool?.diameter ?? THIN_CUTTER) / 2;
+  if (!cuts.isKept)
+    return {
+      record() {
+        // Not in this walk.
+      },
+      isCut() {
+        cuts.want();
+        return false;
+      },
+    };
   return {
     record(motion, state) {
       // Where a motion is only known within bounds, nothing is known to be cut.

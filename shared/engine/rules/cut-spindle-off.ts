@@ -30,6 +30,11 @@ export const cutSpindleOff = defineRule({
     const material = new Material(shop);
     const span = openSpan();
     return {
+      quiet({ feed }, state) {
+        if (state.turning !== 'off') return;
+        if (material.regionFor(state)) material.keepClear(feed, state);
+        else feed.close();
+      },
       motion(motion, state) {
         if (state.turning !== 'off') return;
         if (motion.kind !== 'feed' && motion.kind !== 'arc') return;

@@ -29,6 +29,9 @@ export const cycleLeftOn = defineRule({
     return {
       toolChanging: ({ place }, state) => tell('change', place, state),
       offsetChanged: ({ place }, state) => tell('offset', place, state),
+      quiet() {
+        // Home moves are never quiet.
+      },
       motion: (motion, state) => {
         if (motion.by === 'home') tell('home', state.place({ letters: 'G' }), state);
       },

@@ -38,6 +38,9 @@ export const dustOrVacuumOff = defineRule({
       deed(event) {
         for (const each of switches) each.note(event);
       },
+      quiet({ feed }, state) {
+        if (!switches.every((each) => each.isOn())) material.keepClear(feed, state);
+      },
       motion(motion, state) {
         if (switches.every((each) => each.isOn())) return;
         if (motion.kind !== 'feed' && motion.kind !== 'arc') return;

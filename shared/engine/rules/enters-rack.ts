@@ -1,5 +1,5 @@
 import type { HeldTool } from '../interpreter/events';
-import { pairUp, worstContact, type Meetings } from '../shop/meetings';
+import { pairUp, worstContact, type Meetings, keepApart } from '../shop/meetings';
 import type { Tool } from '../shop/setup';
 import type { Shop } from '../shop/shop';
 import { bodySolids, parkedSolids, rackSolids, toolSolids } from '../shop/solids';
@@ -35,6 +35,9 @@ export const entersRack = defineRule({
     const isBoxed = shop.setup.controller.rapids === 'independent';
     return {
       deed: (event) => reach.setBoot(bootAfter(event, reach.isBootDown())),
+      quiet(quiet, state) {
+        keepApart(quiet.rooms, reach.meetings(state.held), state);
+      },
       motion(motion, state) {
         if (motion.by === 'change') return;
         const meetings = reach.meetings(state.held);

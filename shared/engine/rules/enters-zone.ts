@@ -1,5 +1,5 @@
 import type { HeldTool, Motion } from '../interpreter/events';
-import { pairUp, worstContact, type Meetings } from '../shop/meetings';
+import { pairUp, worstContact, type Meetings, keepApart } from '../shop/meetings';
 import type { Tool, Zone } from '../shop/setup';
 import type { Shop } from '../shop/shop';
 import { bodySolids, tipSolids, toolSolids, zoneSolid, type MovingSolid } from '../shop/solids';
@@ -49,6 +49,10 @@ export const entersZone = defineRule({
     const isBoxed = shop.setup.controller.rapids === 'independent';
     return {
       deed: (event) => guarded.setBoot(bootAfter(event, guarded.isBootDown())),
+      quiet(quiet, state) {
+        for (const { meetings } of guarded.zones(state.held))
+          keepApart(quiet.rooms, meetings, state);
+      },
       motion(motion, state) {
         for (const { zone, meetings } of guarded.zones(state.held)) {
           if (!isForbidden(zone, motion)) continue;

@@ -26,6 +26,9 @@ export const feedAboveMachine = defineRule({
     const { maxFeed } = shop.setup.machine;
     const slowestAxis = Math.min(maxFeed.x, maxFeed.y, maxFeed.z);
     return {
+      quiet(quiet) {
+        quiet.greatestFeed = Math.min(quiet.greatestFeed, slowestAxis);
+      },
       motion(motion, state) {
         if (!(motion.feed > slowestAxis) || !motion.moves) return;
         const most = greatestFeed(motion, maxFeed);

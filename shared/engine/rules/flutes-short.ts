@@ -27,6 +27,10 @@ export const flutesShort = defineRule({
   observe: (shop, report) => {
     const material = new Material(shop);
     return {
+      quiet({ feed }, state) {
+        const { tool } = state.held;
+        if (tool && shankFollows(tool)) material.keepClear(feed, state, tool.fluteLength);
+      },
       motion(motion, state) {
         if (motion.kind === 'rapid' || motion.kind === 'probe' || !isProgramMotion(motion)) return;
         const { tool } = state.held;

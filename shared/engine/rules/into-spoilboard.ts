@@ -38,6 +38,12 @@ export const intoSpoilboard = defineRule({
     const span = openSpan();
     const reference = shop.setup.controller.lengthReference;
     return {
+      quiet({ feed, rapid }, state) {
+        const drop = dropOf(state, reference);
+        if (drop === 0) return;
+        feed.above(board.top - board.allowance + drop);
+        rapid.above(board.top + drop);
+      },
       motion(motion, state) {
         const drop = dropOf(state, reference);
         // The fast test: a motion that stays above the board is none of our business.

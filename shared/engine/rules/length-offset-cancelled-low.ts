@@ -1,7 +1,8 @@
+import type { Motion, MachineState } from '../interpreter/events';
 import { LIMIT_SLACK } from '../geometry/tolerance';
 import { figure, has, toolWords } from './finding-data';
 import { defineRule } from './rule';
-import { usesLengthTable, watchProgramZ } from './watch-length';
+import { usesLengthTable, watchProgramZ, type LengthSinceChange } from './watch-length';
 
 /** The length is taken away, and Z then moves down as if there were no tool. */
 export const lengthOffsetCancelledLow = defineRule({
@@ -23,7 +24,7 @@ export const lengthOffsetCancelledLow = defineRule({
   }),
   observe: (shop, report) => {
     if (!usesLengthTable(shop)) return {};
-    return watchProgramZ(shop, (motion, state, since) => {
+    const judge = (motion: Motion, state: MachineState, since: LengthSinceChange) => {
       const down = motion.fromZ - motion.minZ;
       if (!since.cancelled || down <= LIMIT_SLACK) return;
       const setAt = state.setAt('lengthOffset')?.line;
@@ -35,6 +36,7 @@ export const lengthOffsetCancelledLow = defineRule({
         ...(setAt !== undefined && { setAt }),
       };
       report.found({ cause: '', by: down, at: state.place({ letters: 'Z' }), data }, state);
-    });
+    };
+    return watchProgramZ(shop, judge, (_state, since) => !since.cancelled);
   },
 });

@@ -1,9 +1,9 @@
-import type { Observer } from '../interpreter/events';
+import type { Observer, Motion, MachineState } from '../interpreter/events';
 import type { Shop } from '../shop/shop';
 import { figure, text, toolWords } from './finding-data';
 import { isProgramMotion } from './mode-not-stated';
 import { defineRule, type Reporter } from './rule';
-import { hasLength, usesLengthTable, watchProgramZ } from './watch-length';
+import { hasLength, usesLengthTable, watchProgramZ, type LengthSinceChange } from './watch-length';
 
 /** Z moves in program coordinates with no length applied for the new tool. */
 export const lengthOffsetMissing = defineRule({
@@ -57,12 +57,15 @@ export const lengthOffsetMissing = defineRule({
 });
 
 function watchMissing(shop: Shop, report: Reporter): Observer {
-  return watchProgramZ(shop, (_motion, state, since) => {
-    if (since.cancelled || hasLength(state) || isToldAsNotInTable(state.lengthFrom)) return;
+  const isRight = (state: MachineState, since: LengthSinceChange) =>
+    since.cancelled || hasLength(state) || isToldAsNotInTable(state.lengthFrom);
+  const judge = (_motion: Motion, state: MachineState, since: LengthSinceChange) => {
+    if (isRight(state, since)) return;
     const { number, tool } = state.held;
     const data = { tool: number, name: tool?.name ?? '' };
     report.found({ cause: 'none', at: state.place({ letters: 'Z' }), data }, state);
-  });
+  };
+  return watchProgramZ(shop, judge, isRight);
 }
 
 /** An H other than 0 was applied: if the table does not hold it, its own block has said so. */
@@ -89,6 +92,10 @@ function watchZeroPerTool(_shop: Shop, report: Reporter): Observer {
     },
     offsetChanged(_event, state) {
       setZero(state.held.number);
+    },
+    quiet(quiet, state) {
+      const { number } = state.held;
+      if (number && number !== zeroTool) quiet.close();
     },
     motion(motion, state) {
       if (!isProgramMotion(motion) || motion.fromZ === motion.toZ) return;

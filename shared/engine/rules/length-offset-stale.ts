@@ -1,8 +1,8 @@
-import type { MachineState } from '../interpreter/events';
+import type { MachineState, Motion } from '../interpreter/events';
 import type { Shop } from '../shop/shop';
 import { figure, has, toolWords } from './finding-data';
 import { defineRule } from './rule';
-import { hasLength, usesLengthTable, watchProgramZ } from './watch-length';
+import { hasLength, usesLengthTable, watchProgramZ, type LengthSinceChange } from './watch-length';
 
 /** Z moves with the length of the tool before. */
 export const lengthOffsetStale = defineRule({
@@ -23,11 +23,9 @@ export const lengthOffsetStale = defineRule({
   }),
   observe: (shop, report) => {
     if (!usesLengthTable(shop) || shop.setup.controller.lengthOffset !== 'program') return {};
-    return watchProgramZ(shop, (_motion, state, since) => {
-      if (since.applied || since.cancelled || !hasLength(state)) return;
+    const judge = (_motion: Motion, state: MachineState, since: LengthSinceChange) => {
+      if (isRight(state, since)) return;
       const { number, tool } = state.held;
-      const isOwn = state.lengthFrom === number || state.lengthFrom === since.called;
-      if (isOwn || state.lengthAppliedFor === number) return;
       const lower = lowerThanProgrammed(shop, state);
       const data = {
         tool: number,
@@ -36,9 +34,17 @@ export const lengthOffsetStale = defineRule({
         ...(lower !== undefined && { lower }),
       };
       report.found({ cause: '', at: state.place({ letters: 'Z' }), data }, state);
-    });
+    };
+    return watchProgramZ(shop, judge, isRight);
   },
 });
+
+function isRight(state: MachineState, since: LengthSinceChange): boolean {
+  if (since.applied || since.cancelled || !hasLength(state)) return true;
+  const { number } = state.held;
+  const isOwn = state.lengthFrom === number || state.lengthFrom === since.called;
+  return isOwn || state.lengthAppliedFor === number;
+}
 
 /** How much lower than programmed the tip runs (mm); undefined where the table holds no true lengths. */
 function lowerThanProgrammed(shop: Shop, { held, lengthOffset }: MachineState): number | undefined {

@@ -1,3 +1,4 @@
+import type { Tool } from '../shop/setup';
 import type { MachineState, Motion, Place } from '../interpreter/events';
 import type { Shop } from '../shop/shop';
 import { isProgramMotion } from './mode-not-stated';
@@ -31,6 +32,19 @@ export const lifeShort = defineRule({
   observe: (shop, report) => {
     const used = new Map<number, Use>();
     return {
+      quiet(quiet, state) {
+        const { tool } = state.held;
+        if (state.turning === 'off' || tool?.life === undefined) return;
+        const use = used.get(tool.number);
+        quiet.feedMinutes = Math.min(
+          quiet.feedMinutes,
+          use ? secondsLeft(shop, use, tool) / 60 : 0,
+        );
+      },
+      stretch({ feedMinutes }, state) {
+        const use = used.get(state.held.number ?? NaN);
+        if (use && state.turning !== 'off') use.cutSeconds += feedMinutes * 60;
+      },
       motion(motion, state) {
         const use = useOf(used, motion, state);
         if (use) addCut(shop, use, motion, state);
@@ -61,6 +75,13 @@ function useOf(used: Map<number, Use>, motion: Motion, state: MachineState): Use
     used.set(tool.number, use);
   }
   return use;
+}
+
+/** Until the next place that has to be known: where the margin, then where the life, is passed. */
+function secondsLeft(shop: Shop, use: Use, { life = Infinity, used }: Tool): number {
+  if (use.pastAt) return Infinity;
+  const { lifeMargin } = shop.setup.policy.unattended;
+  return (use.marginAt ? life : life * (1 - lifeMargin)) - used - use.cutSeconds;
 }
 
 function addCut(shop: Shop, use: Use, motion: Motion, state: MachineState): void {

@@ -11,9 +11,15 @@ export function reportUnstated(
   what: SettableState,
   relies: (motion: Motion) => boolean,
   judge: (state: MachineState) => { readonly severity?: Severity; readonly data: FindingData },
+  kinds: 'all' | 'arcs' = 'all',
 ): Observer {
   let isDone = false;
   return {
+    quiet(quiet) {
+      if (isDone) return;
+      if (kinds === 'arcs') quiet.hasArcs = false;
+      else quiet.close();
+    },
     motion(motion, state) {
       if (isDone || !relies(motion)) return;
       isDone = true;

@@ -42,6 +42,10 @@ export const nearTravel = defineRule({
       );
     };
     return {
+      quiet({ feed, rapid }) {
+        for (const room of [feed, rapid])
+          room.within({ x: [lowX, highX], y: [lowY, highY], z: [lowZ, highZ] });
+      },
       motion(motion, state) {
         if (
           lowX <= motion.minX &&

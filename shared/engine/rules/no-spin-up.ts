@@ -40,6 +40,9 @@ export const noSpinUp = defineRule({
       toolChanged: (_event, state) => {
         if (state.turning === 'off') ramp.stop();
       },
+      quiet(quiet) {
+        if (!isSaid && ramp.isWaiting()) quiet.close();
+      },
       motion(motion, state) {
         if (isSaid || !ramp.isWaiting()) return;
         const lasts = secondsOf(motion, shop.setup);

@@ -46,6 +46,9 @@ export const numberOrder = defineRule({
         blocksSince = 0;
         isChosen = false;
       },
+      quiet(quiet) {
+        if (bareChange && blocksSince <= 1) quiet.close();
+      },
       block() {
         blocksSince += 1;
       },

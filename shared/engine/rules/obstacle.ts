@@ -1,5 +1,5 @@
 import type { MachineState } from '../interpreter/events';
-import { pairUp, worstContact, type Meetings } from '../shop/meetings';
+import { pairUp, worstContact, type Meetings, keepApart } from '../shop/meetings';
 import type { Tool } from '../shop/setup';
 import type { Shop } from '../shop/shop';
 import { bodySolids, obstacleSolid, toolSolids } from '../shop/solids';
@@ -47,6 +47,9 @@ export const obstacle = defineRule({
     const isBoxed = shop.setup.controller.rapids === 'independent';
     return {
       deed: (event) => placed.setBoot(bootAfter(event, placed.isBootDown())),
+      quiet(quiet, state) {
+        keepApart(quiet.rooms, placed.meetings(state), state);
+      },
       motion(motion, state) {
         if (motion.by === 'change') return;
         const contact = worstContact(

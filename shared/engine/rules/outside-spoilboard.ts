@@ -32,6 +32,10 @@ export const outsideSpoilboard = defineRule({
     const span = openSpan();
     const { min, max } = area;
     return {
+      quiet({ feed }, state) {
+        if (state.turning === 'off') return;
+        feed.within({ x: [min.x, max.x], y: [min.y, max.y] });
+      },
       motion(motion, state) {
         const by = Math.max(
           min.x - motion.minX,

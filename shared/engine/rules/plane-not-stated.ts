@@ -21,7 +21,13 @@ export const planeNotStated = defineRule({
     advice: 'Write G17 at the head of the program.',
   }),
   observe: (_shop, report) =>
-    reportUnstated(report, 'plane', needsPlane, (state) => ({ data: { plane: state.plane } })),
+    reportUnstated(
+      report,
+      'plane',
+      needsPlane,
+      (state) => ({ data: { plane: state.plane } }),
+      'arcs',
+    ),
 });
 
 function needsPlane(motion: Motion): boolean {

@@ -29,9 +29,13 @@ export const plungeAtRapid = defineRule({
   }),
   observe: (shop, report) => {
     const material = new Material(shop);
-    const cut = openCutRecord(shop, material);
+    const cut = openCutRecord(shop, material, report.cuts);
     const span = openSpan();
     return {
+      quiet({ feed, rapid }, state) {
+        material.keepClear(rapid, state);
+        if (report.cuts.isKept) material.keepClear(feed, state);
+      },
       motion(motion, state) {
         if (motion.kind !== 'rapid') return cut.record(motion, state);
         if (motion.inHole || motion.by === 'change' || motion.fromZ <= motion.toZ) return;

@@ -20,6 +20,9 @@ export const probeInProgram = defineRule({
     advice: 'Watch the probing, or measure beforehand and write the figure into the program.',
   }),
   observe: (_shop, report) => ({
+    quiet() {
+      // A probe is never quiet.
+    },
     motion(motion, state) {
       if (motion.kind !== 'probe') return;
       report.found({ cause: '', at: state.place({ letters: 'G' }), data: {} }, state);

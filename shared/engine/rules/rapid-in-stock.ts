@@ -32,12 +32,16 @@ export const rapidInStock = defineRule({
   }),
   observe: (shop, report) => {
     const material = new Material(shop);
-    const cut = openCutRecord(shop, material);
+    const cut = openCutRecord(shop, material, report.cuts);
     const isBoxed = shop.setup.controller.rapids === 'independent';
     const span = openSpan();
     const isMet = (motion: Motion, state: Parameters<Material['isMet']>[1], out: Span) =>
       isBoxed ? material.isMetByBox(motion, state, out) : material.isMet(motion, state, out);
     return {
+      quiet({ feed, rapid }, state) {
+        material.keepClear(rapid, state);
+        if (report.cuts.isKept) material.keepClear(feed, state);
+      },
       motion(motion, state) {
         if (motion.kind !== 'rapid') return cut.record(motion, state);
         if (motion.inHole || motion.by === 'change') return;

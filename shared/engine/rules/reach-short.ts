@@ -27,6 +27,10 @@ export const reachShort = defineRule({
   observe: (shop, report) => {
     const material = new Material(shop);
     return {
+      quiet({ feed }, state) {
+        const { tool } = state.held;
+        if (tool) material.keepClear(feed, state, tool.stickOut);
+      },
       motion(motion, state) {
         if (motion.kind === 'rapid' || motion.kind === 'probe' || !isProgramMotion(motion)) return;
         const { tool } = state.held;

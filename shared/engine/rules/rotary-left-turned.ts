@@ -24,6 +24,9 @@ export const rotaryLeftTurned = defineRule({
   observe: (_shop, report) => {
     let from: number | undefined;
     return {
+      quiet(quiet) {
+        if (from === undefined) quiet.close();
+      },
       motion(motion) {
         from ??= motion.fromA;
       },

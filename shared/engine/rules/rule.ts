@@ -66,6 +66,15 @@ export interface LengthWords {
   feed(mmPerMinute: number): string;
 }
 
+/**
+ * Whether this walk remembers where it has cut. Few programs ever need it, and remembering costs more than
+ * all the rest, so a check walks without; a rule that has to know wants it, and then the walk begins again.
+ */
+export interface CutMemory {
+  readonly isKept: boolean;
+  want(): void;
+}
+
 /** What a rule says happened in the block now read (or at `at`). */
 export interface FindingDraft {
   /** Keys the episode beside rule, tool and work offset: axis and side, body pair, code, word. */
@@ -81,6 +90,7 @@ export interface FindingDraft {
   readonly tool?: number | undefined;
 }
 export interface Reporter {
+  readonly cuts: CutMemory;
   /** Counts the block towards the episode of its cause; blocks, not motions, are counted. */
   found(draft: FindingDraft, state: MachineState): void;
 }

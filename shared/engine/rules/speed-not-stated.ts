@@ -28,6 +28,9 @@ export const speedNotStated = defineRule({
         started = undefined;
         if (turning !== 'off' && state.setAt('speed') === undefined) started = { at: place, code };
       },
+      quiet({ feed }) {
+        if (started) feed.close();
+      },
       motion(motion, state) {
         if (!started || motion.kind === 'rapid') return;
         report.found({ cause: '', at: started.at, data: { code: started.code } }, state);

@@ -18,6 +18,9 @@ export const spindleOnAtProbe = defineRule({
     advice: 'Write M5 and a dwell until the spindle is still before probing.',
   }),
   observe: (_shop, report) => ({
+    quiet() {
+      // A probe is never quiet.
+    },
     motion(motion, state) {
       if (motion.kind !== 'probe' || state.turning === 'off') return;
       report.found({ cause: '', at: state.place({ letters: 'G' }), data: {} }, state);

@@ -27,6 +27,9 @@ export const stockNotStated = defineRule({
     if (job?.stock) return {};
     let isSaid = false;
     return {
+      quiet({ feed }) {
+        if (!isSaid) feed.close();
+      },
       motion(motion, state) {
         if (isSaid || (motion.kind !== 'feed' && motion.kind !== 'arc')) return;
         isSaid = true;

@@ -23,6 +23,9 @@ export const unitsChange = defineRule({
   observe: (_shop, report) => {
     let hasMoved = false;
     return {
+      quiet(quiet) {
+        if (!hasMoved) quiet.close();
+      },
       motion(motion) {
         if (!hasMoved && isProgramMotion(motion)) hasMoved = true;
       },

@@ -39,6 +39,14 @@ export const unitsMismatch = defineRule({
     });
     return {
       ...comments,
+      quiet(quiet, state) {
+        comments.quiet?.(quiet, state);
+        if (!unitsAt) quiet.close();
+      },
+      stretch({ minX, maxX, minY, maxY }) {
+        widen(spans[0]!, minX, maxX);
+        widen(spans[1]!, minY, maxY);
+      },
       motion(motion, state) {
         comments.motion?.(motion, state);
         if (!isProgramMotion(motion)) return;

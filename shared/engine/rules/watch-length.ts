@@ -26,6 +26,7 @@ export function usesLengthTable(shop: Shop): boolean {
 export function watchProgramZ(
   shop: Shop,
   judge: (motion: Motion, state: MachineState, since: LengthSinceChange) => void,
+  isRight: (state: MachineState, since: LengthSinceChange) => boolean,
 ): Observer {
   const isAppliedByChange = shop.setup.controller.lengthOffset !== 'program';
   const since = { applied: false, cancelled: false, called: 0 };
@@ -39,6 +40,9 @@ export function watchProgramZ(
       const isOff = event.code === 'G49' || event.number === 0;
       if (!isOff) since.applied = true;
       since.cancelled = isOff && since.applied;
+    },
+    quiet(quiet, state) {
+      if (state.changed && state.held.number && !isRight(state, since)) quiet.close();
     },
     motion(motion, state) {
       if (!state.changed || !isProgramMotion(motion)) return;

@@ -56,6 +56,9 @@ export function watchSelections(
       firstTool ??= event.written;
       hasCut = false;
     },
+    quiet({ feed }) {
+      if (!hasCut || (pending && !pending.cutAfter)) feed.close();
+    },
     motion(motion) {
       if (hasCut && (!pending || pending.cutAfter)) return;
       if (motion.kind === 'rapid' || !motion.moves || !isProgramMotion(motion)) return;

@@ -52,6 +52,9 @@ export function watchToolComments(
     block(state) {
       if (isMoving && waiting.length > 0) settle(state);
     },
+    quiet(quiet) {
+      if (!isMoving) quiet.close();
+    },
     motion(motion) {
       if (!isMoving && isProgramMotion(motion)) isMoving = true;
     },

@@ -4,6 +4,7 @@ import { type Span } from '../geometry/span';
 import { findBoxSpan, findSpan, isApart } from '../geometry/sweep';
 import { distanceFrom } from '../geometry/sweep-arc';
 import { LIMIT_SLACK } from '../geometry/tolerance';
+import type { Room } from '../geometry/room';
 import type { Tool } from './setup';
 import type { Shop } from './shop';
 import {
@@ -52,6 +53,19 @@ export class Material {
       this.place(now);
     }
     return this.region;
+  }
+
+  /**
+   * Leaves in the room what is certainly clear of the stock, or in it by no more than `depth` (mm) with the
+   * tip: beside it where the head stands beside it now, above it otherwise.
+   */
+  keepClear(room: Room, now: WorkPlace & Place3, depth = 0): void {
+    const region = this.regionFor(now);
+    if (!region || !this.bounds) return;
+    const { minX, minY, maxX, maxY } = this.bounds;
+    const isBeside = now.x < minX || maxX < now.x || now.y < minY || maxY < now.y;
+    if (isBeside && depth === 0) room.apartFrom(this.bounds, now.x, now.y, now.z);
+    else room.above(region.maxZ - depth);
   }
 
   /** Whether the tool meets stock on this path; `span` then says where. */

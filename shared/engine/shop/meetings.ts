@@ -3,6 +3,7 @@ import { boundsOf, boundsOfAll, type Prism } from '../geometry/prism';
 import { openSpan, type Span } from '../geometry/span';
 import { findBoxSpan, findSpan, isApart } from '../geometry/sweep';
 import { LIMIT_SLACK } from '../geometry/tolerance';
+import type { Room } from '../geometry/room';
 import { regionOfMeeting, type MovingSolid, type StandingSolid } from './solids';
 
 /** Two solids that a path of the gauge point would bring together. */
@@ -61,6 +62,15 @@ export function worstContact(path: Path, meetings: Meetings, isBox: boolean): Co
   }
   if (!worst || isLifting(path)) return undefined;
   return { meeting: worst, raise };
+}
+
+/** Leaves in the rooms what certainly meets none of them; a straight lift never does, see worstContact. */
+export function keepApart(
+  rooms: readonly Room[],
+  { bounds }: Meetings,
+  { x, y, z }: { readonly x: number; readonly y: number; readonly z: number },
+): void {
+  for (const room of rooms) room.apartFrom(bounds, x, y, z);
 }
 
 function isLifting(path: Path): boolean {

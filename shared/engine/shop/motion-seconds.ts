@@ -59,7 +59,8 @@ function axisSeconds(way: number, perMinute: number, acceleration: number): numb
   return travelSeconds(Math.abs(way), acceleration, perMinute / 60, 0, 0);
 }
 
-function weakest(plane: Path['plane'], limits: PerAxis): number {
+/** The lesser limit of the two axes of a plane. */
+export function weakest(plane: Path['plane'], limits: PerAxis): number {
   switch (plane) {
     case 'xy':
       return Math.min(limits.x, limits.y);

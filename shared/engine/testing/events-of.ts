@@ -22,7 +22,7 @@ export function eventsOf(
   return told;
 }
 
-export type EventKind = Exclude<keyof Observer, 'motionKinds'>;
+export type EventKind = Exclude<keyof Observer, 'pace' | 'quiet' | 'quietMotion' | 'stretch'>;
 type Add = (text: string, state: MachineState) => void;
 
 function observer(add: Add, told: string[]): Required<Pick<Observer, EventKind>> {

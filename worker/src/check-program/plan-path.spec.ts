@@ -21,7 +21,7 @@ function walk(text: string, builder: PlanPathBuilder): { path: PlanPath; sampled
       if (motion.moves) sampled.push(...sample(motion));
     },
   };
-  const check = startCheck(setup, { observers: [builder.observer, sampler] });
+  const check = startCheck(setup, { observe: () => [builder.observer, sampler] });
   check.push(Buffer.from(text));
   expect(check.endOfText()).toBe('done');
   return { path: pathSchema.parse(builder.result()), sampled };

@@ -81,13 +81,18 @@ export function buildPlanPath({ mostPoints = MOST_POINTS }: PlanPathOptions = {}
     }
     if (mostPoints <= pointCount) makeRoom();
   };
+  const take = (motion: Motion, state: MachineState): void => {
+    if (truncated || !showsInPlan(motion)) return;
+    if (isKnown(motion)) follow(motion, state);
+    else endRun();
+  };
   return {
     observer: {
-      motion(motion, state) {
-        if (truncated || !showsInPlan(motion)) return;
-        if (isKnown(motion)) follow(motion, state);
-        else endRun();
+      motion: take,
+      quiet() {
+        // Every motion is drawn, quiet or not.
       },
+      quietMotion: take,
     },
     result() {
       endRun();

@@ -26,15 +26,19 @@ export interface Walked {
   readonly path: PlanPath;
 }
 
-/** Streams the program through the engine, twice where it has blocks that may be skipped. */
+/** Streams the program through the engine, again for as long as the check asks for it. */
 export async function walkProgram(
   run: CheckToRun,
   setup: Setup,
   options: WalkOptions,
 ): Promise<Walked> {
   const { program } = run;
-  const plan = buildPlanPath();
-  const check = options.startCheck(setup, { observers: [plan.observer], digests: false });
+  let plan = buildPlanPath();
+  const observe = () => {
+    plan = buildPlanPath();
+    return [plan.observer];
+  };
+  const check = options.startCheck(setup, { observe, digests: false });
   const guarded = <T>(step: () => T): T => {
     try {
       return step();
@@ -57,7 +61,7 @@ export async function walkProgram(
     }
     return guarded(() => check.endOfText());
   };
-  if ((await readOnce()) === 'read-again') await readOnce();
+  while ((await readOnce()) === 'read-again');
   const { name, sha256 } = program;
   return { report: guarded(() => check.report({ name, sha256 })), path: plan.result() };
 }

@@ -1,0 +1,72 @@
+import type { MachineState, Motion, Observer } from '../events';
+import type { Pace } from './pace';
+import { Quiet } from './quiet';
+import { Stretch } from './stretch';
+
+/** Motions told between two questions, at most: what is quiet also depends on where the head is. */
+const MOST_PATIENCE = 64;
+
+/**
+ * Knows what motion is quiet now. The observers are asked anew after every event; after motion that was
+ * not quiet ever more seldom, because it can only make them less curious.
+ */
+export class QuietWatch {
+  readonly quiet = new Quiet();
+  readonly stretch = new Stretch();
+  /** Whether every observer of motions says what it need not see. */
+  readonly isPossible: boolean;
+  readonly pace: Pace | undefined;
+  /** Who wants every quiet motion. */
+  readonly followers: readonly NonNullable<Observer['quietMotion']>[];
+  private readonly asked: readonly NonNullable<Observer['quiet']>[];
+  private readonly gathering: readonly NonNullable<Observer['stretch']>[];
+  private isStale = true;
+  private loud = 0;
+  private patience = 1;
+
+  constructor(
+    observers: readonly Observer[],
+    private readonly state: MachineState,
+  ) {
+    this.asked = observers.flatMap(({ quiet }) => (quiet ? [quiet] : []));
+    this.followers = observers.flatMap(({ quietMotion }) => (quietMotion ? [quietMotion] : []));
+    this.gathering = observers.flatMap(({ stretch }) => (stretch ? [stretch] : []));
+    this.pace = observers.find(({ pace }) => pace !== undefined)?.pace;
+    this.isPossible =
+      this.pace !== undefined &&
+      observers.every(({ motion, quiet }) => !motion || quiet !== undefined);
+  }
+
+  /** Something other than motion was told: what was quiet may not be now. */
+  ask(): void {
+    this.isStale = true;
+  }
+
+  noteLoud(motion: Motion): void {
+    this.loud++;
+    if (motion.by !== 'program') this.isStale = true;
+    else if (motion.kind !== 'rapid' && motion.feed > 0)
+      this.quiet.feedMinutes -= motion.length / motion.feed;
+  }
+
+  /** Whether any motion is quiet now. */
+  refresh(): boolean {
+    if (this.isStale) this.patience = 1;
+    else if (this.loud < this.patience) return !this.quiet.isClosed;
+    else this.patience = Math.min(2 * this.patience, MOST_PATIENCE);
+    this.isStale = false;
+    this.loud = 0;
+    this.quiet.open();
+    for (const quiet of this.asked) quiet(this.quiet, this.state);
+    return !this.quiet.isClosed;
+  }
+
+  /** Hands over what has been gathered, before anything else is told. */
+  flush(): void {
+    const { stretch } = this;
+    if (stretch.motions === 0) return;
+    this.quiet.feedMinutes -= stretch.feedMinutes;
+    for (const gather of this.gathering) gather(stretch, this.state);
+    stretch.clear();
+  }
+}
