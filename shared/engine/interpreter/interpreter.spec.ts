@@ -350,7 +350,7 @@ describe('words that nothing uses', () => {
   test.each([
     ['X1 H1', ['1 4-6 not-modelled no-use', '1 rapid X0 Y0 Z0 → X1 Y0 Z0']],
     ['X1 I1', ['1 4-6 not-modelled no-use', '1 rapid X0 Y0 Z0 → X1 Y0 Z0']],
-    ['X1 E5', ['1 4-6 not-modelled no-axis', '1 rapid X0 Y0 Z0 → X1 Y0 Z0']],
+    ['X1 E5', ['1 4-6 not-modelled other-axis', '1 rapid X0 Y0 Z0 → X1 Y0 Z0']],
     ['X1 A5', ['1 4-6 not-modelled no-axis', '1 rapid X0 Y0 Z0 → X1 Y0 Z0 A5']],
     // Noughts that say again that nothing is on.
     ['G49 H0\nG40 D0\nT1 M6 H0', []],

@@ -97,20 +97,20 @@ function referenceAxis(
   parameter: number,
   stored: Partial<Record<AxisName, number>>,
 ): LiveParameter {
-  if (axis === 'a') return { read: () => 0 };
   const unit = storedUnit(read, axis);
   const { references } = read;
   return {
     read() {
-      const mm = references[code]?.[axis] ?? stored[axis];
+      const mm = references[code]?.[axis] ?? stored[axis] ?? (axis === 'a' ? 0 : undefined);
       return mm === undefined ? unknownValue(parameter) : mm / unit;
     },
     write(value) {
       if (isBounds(value)) return 'unknown';
       stored[axis] = (value ?? 0) * unit;
-      const { x, y, z } = Object.assign(stored, references[code], { [axis]: stored[axis] });
+      const { x, y, z, a } = Object.assign(stored, references[code], { [axis]: stored[axis] });
       // A stored point is one once all of it is known.
-      if (x !== undefined && y !== undefined && z !== undefined) references[code] = { x, y, z };
+      if (x !== undefined && y !== undefined && z !== undefined)
+        references[code] = { x, y, z, a: a ?? 0 };
       return undefined;
     },
   };

@@ -54,14 +54,15 @@ function moveHome(run: Run, code: number): void {
   target.x = all || block.has(LETTER.X) ? home.x : machine.x;
   target.y = all || block.has(LETTER.Y) ? home.y : machine.y;
   target.z = all || block.has(LETTER.Z) ? home.z : machine.z;
-  target.a = machine.a;
-  run.motion.named = all ? 7 : named;
+  const turns = block.has(LETTER.A) || (all && run.shop.setup.machine.travel.a !== undefined);
+  target.a = turns ? (home.a ?? 0) : machine.a;
+  run.motion.named = all ? 7 | (turns ? 8 : 0) : named;
   moveStraight(run, 'rapid', 'home', target, NaN);
 }
 
 function storeReference(run: Run, code: number): void {
   const { machine, references } = run;
-  const point = { x: machine.x, y: machine.y, z: machine.z };
+  const point = { x: machine.x, y: machine.y, z: machine.z, a: machine.a };
   if (code === 281) references.g28 = point;
   else references.g30 = point;
 }
@@ -83,7 +84,7 @@ function axisWord(run: Run, axis: number): number | undefined {
   return block.value(letter) * (letter === LETTER.A ? 1 : machine.unit);
 }
 
-/** G10 L2 and L20 set an origin, L1 a length; none of them moves anything. */
+/** G10 L2 and L20 set an origin, L1 a tool's offsets; none of them moves anything. */
 function setOffsets(run: Run): void {
   const { block } = run;
   const kind = block.has(LETTER.L) ? wholeNumber(block.value(LETTER.L)) : NaN;
@@ -100,7 +101,7 @@ function setOffsets(run: Run): void {
   if (!block.has(LETTER.P))
     return refuse(run, 'missing-word', { code: 'G10' }, { code: 'G10', letter: 'P' });
   const number = wholeNumber(block.value(LETTER.P));
-  if (kind === 1) return setTableLength(run, number);
+  if (kind === 1) return setTable(run, number);
   const active = number === 0 && !isStrict ? run.machine.workOffset : offsetName(number);
   if (active === undefined) return refuseNumber(run);
   setOrigin(run, active, kind === 20);
@@ -131,10 +132,13 @@ function setOrigin(run: Run, name: string, isHere: boolean): void {
   placeProgramZero(run);
 }
 
-function setTableLength(run: Run, number: number): void {
+/** G10 L1: Z is a length, R the radius of the cutter (common practice, no source). */
+function setTable(run: Run, number: number): void {
+  const { block, machine } = run;
   if (!(number >= 1)) return refuseNumber(run);
   const length = axisWord(run, 2);
   if (length !== undefined) run.lengths.set(number, length);
+  if (block.has(LETTER.R)) run.diameters.set(number, 2 * block.value(LETTER.R) * machine.unit);
 }
 
 /** G52: a shift inside whichever offset is active; unnamed axes keep theirs. */

@@ -44,7 +44,8 @@ export function openRun(shop: Shop, block: Block, observers: readonly Observer[]
     dialect: openDialect(controller),
     block,
     tell: new Broadcaster(observers, machine),
-    lengths: new Map(Object.entries(offsets.length).map(([number, mm]) => [Number(number), mm])),
+    lengths: byNumber(offsets.length),
+    diameters: byNumber(offsets.diameter),
     unknown: undefined,
     movesAtBounds: false,
     offset: noOffset(),
@@ -64,6 +65,9 @@ export function openRun(shop: Shop, block: Block, observers: readonly Observer[]
   placeProgramZero(run);
   return run;
 }
+
+const byNumber = (table: Readonly<Record<string, number>>): Map<number, number> =>
+  new Map(Object.entries(table).map(([number, mm]) => [Number(number), mm]));
 
 function setDefaults(machine: Machine, { defaults, switches }: Controller): void {
   machine.unit = defaults.units === 'mm' ? 1 : 25.4;

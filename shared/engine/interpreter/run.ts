@@ -12,6 +12,9 @@ import type { Machine } from './machine';
 import type { Unknown } from './unknown-position';
 import type { WorkOffsets } from './work-offsets';
 
+/** A stored point of G28 or G30 in machine mm; A in degrees, machine zero where nothing has stored another. */
+export type Reference = Point & { readonly a?: number };
+
 /** What every part of the interpreter works on: one walk of one program over one machine. */
 export interface Run {
   readonly shop: Shop;
@@ -23,8 +26,10 @@ export interface Run {
   readonly offsets: WorkOffsets;
   /** Length offsets by number, mm; G10 L1 may change them. */
   readonly lengths: Map<number, number>;
+  /** Diameter offsets by number, mm; G10 L1 may change them. */
+  readonly diameters: Map<number, number>;
   /** The stored points of G28 and G30; their .1 forms change them. */
-  readonly references: { g28: Point | undefined; g30: Point | undefined };
+  readonly references: { g28: Reference | undefined; g30: Reference | undefined };
   readonly grammar: Grammar;
   readonly parameters: ParameterStore;
   readonly probed: ProbeResult;

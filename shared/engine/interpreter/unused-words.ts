@@ -8,7 +8,7 @@ import { isCycle } from './cycles';
 export const RARE_LETTERS = letterBits('ABCDEHIJKLPQRUVW');
 const CENTRES = letterBits('IJKR');
 const CYCLE_WORDS = letterBits('RPQL');
-/** Letters of axes or devices this engine does not follow. */
+/** Letters of axes or devices this engine does not follow: of rotary axes it knows A alone. */
 const FOREIGN = letterBits('BCEUVW');
 /** With one of these beside them, an H or D of nought only says again that nothing is on. */
 const CANCELS = (1 << GROUP.compensation) | (1 << GROUP.length) | (1 << GROUP.change);
@@ -34,7 +34,8 @@ export function checkUse(run: Run): void {
   for (let letter = 0; letter < 26; letter++) {
     if ((unused & (1 << letter)) === 0 || isIdle(run, letter)) continue;
     const word = block.wordOf[letter]!;
-    const isForeign = (FOREIGN & (1 << letter)) !== 0 || letter === LETTER.A;
+    const isForeign = (FOREIGN & (1 << letter)) !== 0;
+    const reason = isForeign ? 'other-axis' : letter === LETTER.A ? 'no-axis' : 'no-use';
     tellProblem(
       run,
       'not-modelled',
@@ -42,7 +43,7 @@ export function checkUse(run: Run): void {
       {
         what: block.written(word),
         letter: letterName(letter),
-        reason: isForeign ? 'no-axis' : 'no-use',
+        reason,
         code: machine.motionMode,
       },
     );

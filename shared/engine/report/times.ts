@@ -1,5 +1,6 @@
 import type { MachineState, Motion, Observer } from '../interpreter/events';
 import { Pace } from '../interpreter/quiet/pace';
+import { turnSeconds } from '../shop/motion-seconds';
 import type { Shop } from '../shop/shop';
 
 export interface Times {
@@ -23,16 +24,18 @@ export function watchTimes(shop: Shop): Observer & { result(): Times } {
   let isCutting = false;
   let tool = -1;
   let speed = 0;
+  const addFeed = (seconds: number) => {
+    if (isCutting) {
+      sums.cutting += seconds;
+      cuttingByTool.set(tool, (cuttingByTool.get(tool) ?? 0) + seconds);
+    } else sums.air += seconds;
+  };
   /** Puts down what the pace has timed to the tool and the spindle it was timed under. */
   const book = () => {
     const seconds = pace.takeFeedSeconds();
     sums.rapid += pace.rapidSeconds;
     pace.rapidSeconds = 0;
-    if (seconds === 0) return;
-    if (isCutting) {
-      sums.cutting += seconds;
-      cuttingByTool.set(tool, (cuttingByTool.get(tool) ?? 0) + seconds);
-    } else sums.air += seconds;
+    if (seconds !== 0) addFeed(seconds);
   };
   const rest = () => {
     pace.rest();
@@ -44,6 +47,13 @@ export function watchTimes(shop: Shop): Observer & { result(): Times } {
     if (cuts !== isCutting || number !== tool) book();
     isCutting = cuts;
     tool = number;
+  };
+  const turn = (motion: Motion, state: MachineState) => {
+    const seconds = turnSeconds(motion);
+    if (seconds === 0) return;
+    rest();
+    noteState(state);
+    addFeed(seconds);
   };
   const spinTo = (next: number) => {
     const needed = (machine.spindle.spinUp * (next - speed)) / machine.spindle.maxRpm;
@@ -57,7 +67,8 @@ export function watchTimes(shop: Shop): Observer & { result(): Times } {
       noteState(state);
     },
     motion(motion, state) {
-      if (!motion.moves || motion.by === 'change' || motion.isAlternative) return;
+      if (motion.by === 'change' || motion.isAlternative) return;
+      if (!motion.moves) return turn(motion, state);
       noteState(state);
       follow(pace, motion, state.path === 'G64');
     },

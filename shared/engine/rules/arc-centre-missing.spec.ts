@@ -33,3 +33,20 @@ M30
     );
   });
 });
+
+test('flags one centre word where centres count from program zero', () => {
+  checkRule(
+    arcCentreMissing,
+    {},
+    `
+G21 G90 G54 G17 F500
+G90.1 G0 X10 Y0
+G3 X0 Y10 I0
+^^^^^^^^^^^^ arc-centre-missing: Arc centres count from program zero here (G90.1), and the block gives one of the two centre words.
+G0 X10 Y0
+G3 X0 Y10 I0 J0
+G91.1 G3 X-10 Y0 J-10
+M30
+`,
+  );
+});

@@ -22,7 +22,10 @@ export const arcCentreMissing = defineRule({
     good: 'G21 G90 G54 G17\nG0 X10 Y0\nG3 X0 Y10 I-10 J0 F500\nG1 X-10 Y0\nM30',
   },
   word: (data) => ({
-    message: `An arc is in force here, but the block gives neither a radius nor a centre.`,
+    message:
+      text(data, 'reason') === 'one-word'
+        ? 'Arc centres count from program zero here (G90.1), and the block gives one of the two centre words.'
+        : 'An arc is in force here, but the block gives neither a radius nor a centre.',
     advice: `Add ${CENTRE_LETTERS[text(data, 'plane')] ?? 'the centre words'} or R, or write G1 if a straight move is meant.`,
   }),
   observe: (_shop, report) => reportProblem(report, 'arc-centre-missing', () => ''),

@@ -14,7 +14,7 @@ export const beyondTravel = defineRule({
   severity: 'stop',
   protects: 'The machine from an overtravel stop in mid-cut, and the work it was cutting.',
   explanation:
-    'Every motion of the gauge point is held against the travel that the controller enforces, arcs by the quadrant points they pass, cycles by every part. More than 0.001 mm past a limit counts; exactly at it is inside. Tool changes have travel of their own. An axis whose work offset has no value yet is not judged; the work-zero window says what the value may be.',
+    'Every motion of the gauge point is held against the travel that the controller enforces, arcs by the quadrant points they pass, cycles by every part. More than 0.001 mm past a limit counts; exactly at it is inside. Tool changes have travel of their own. A is taken as written: no turn is shortened, so A370 is past a limit of 360 degrees. An axis whose work offset has no value yet is not judged; the work-zero window says what the value may be.',
   examples: {
     bad: 'G21 G90 G17 G54\nT1 M6\nG43 H1\nG0 X1300 Y10\nM30',
     good: 'G21 G90 G17 G54\nT1 M6\nG43 H1\nG0 X1270 Y10\nM30',

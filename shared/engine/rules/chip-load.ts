@@ -39,6 +39,8 @@ export const chipLoad = defineRule({
         const { tool } = state.held;
         if (motion.kind !== 'feed' || !tool?.flutes || motion.fromZ !== motion.toZ) return;
         if (state.turning === 'off' || !(state.speed > 0) || !motion.moves) return;
+        // Work that turns under the tool runs past it faster than F says.
+        if (motion.fromA !== motion.toA) return;
         const band = bandFor(shop, state);
         const load = motion.feed / (state.speed * tool.flutes);
         if (!band || (band.from <= load && load <= band.to)) return;

@@ -34,6 +34,8 @@ function describe(data: Parameters<typeof text>[0]): string {
       return `${what} goes to a reference point that the machine description does not give.`;
     case 'call':
       return `${what} calls another program, which this check does not follow.`;
+    case 'other-axis':
+      return `${what} moves an axis this check does not follow: beside X, Y and Z it knows A alone.`;
     case 'no-axis':
       return `${what} moves an axis that the machine description does not have.`;
     case 'no-use':
@@ -50,6 +52,8 @@ function advise(reason: string): string {
   if (reason === 'depends')
     return 'If it is a parameter, state its starting value in the controller description; else write the figure into the program, or have a person prove this part.';
   if (reason === 'call') return 'Post the program in one piece, or have a person prove this part.';
+  if (reason === 'other-axis')
+    return 'Post for a machine without that axis, or have a person prove this part.';
   if (reason === 'no-axis') return 'Post for a machine without that axis, or describe the axis.';
   if (reason === 'no-use') return 'Take the word out, or write the code it belongs to.';
   return 'Take it out if it is not needed, or declare in the controller description what it does.';

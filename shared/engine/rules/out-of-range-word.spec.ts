@@ -88,3 +88,41 @@ M30
 `,
   );
 });
+
+test('flags turns of an arc that are no whole number from one on', () => {
+  checkRule(
+    outOfRangeWord,
+    {},
+    `
+G21 G90 G54 G17 F500
+G3 I10 P1.5
+       ^^^^ out-of-range-word: P1.5 is not a whole number; P has to be one.
+G3 I10 P0
+       ^^ out-of-range-word: P0 has to be more than zero.
+G3 I10 P5000
+       ^^^^^ out-of-range-word: P5000 asks for more turns than any arc makes.
+G3 I10 P3
+M30
+`,
+  );
+});
+
+test('flags a diameter offset the table does not hold, by number or as that of the held tool', () => {
+  checkRule(
+    outOfRangeWord,
+    { controller: { diameterOffsetShift: 50 } },
+    `
+G21 G90 G54 G17 F500
+T2 M6
+G41 D99
+    ^^^ out-of-range-word: D99 names an offset that the table does not hold.
+G1 X50
+G40 X90
+G41
+^^^ out-of-range-word: G41 takes D52, the diameter offset of the tool in the spindle, which the table does not hold.
+G1 X150
+G40 X200
+M30
+`,
+  );
+});

@@ -9,6 +9,9 @@ export interface TimedMotion extends Path {
   /** mm/min; NaN for rapids and where none is known. */
   readonly feed: number;
   readonly moves: boolean;
+  /** Degrees. */
+  readonly fromA: number;
+  readonly toA: number;
 }
 
 /** Greatest speed (mm/s) and acceleration (mm/s²) along a path, as the axes allow it. */
@@ -41,9 +44,18 @@ export function findPathLimits(motion: TimedMotion, machine: Machine, out: PathL
 
 /** Seconds for the motion alone, from standstill to standstill. */
 export function aloneSeconds(motion: TimedMotion, machine: Machine): number {
-  if (!motion.moves) return 0;
+  if (!motion.moves) return turnSeconds(motion);
   const { speed, acceleration } = findPathLimits(motion, machine, { speed: 0, acceleration: 0 });
   return travelSeconds(motion.length, acceleration, speed, 0, 0);
+}
+
+/**
+ * Seconds of a feed that turns A alone: its F counts degrees a minute (NISTIR 6556, chapter 2, from memory). The description gives no
+ * speed or acceleration of A, so that a rapid turn is taken for instant and a feed turn has no ramps.
+ */
+export function turnSeconds({ kind, feed, fromA, toA }: TimedMotion): number {
+  if (kind === 'rapid' || !(feed > 0)) return 0;
+  return (Math.abs(toA - fromA) / feed) * 60;
 }
 
 /** A rapid whose axes each run at their own speed lasts as long as the slowest of them. */

@@ -98,12 +98,12 @@ function readNumber(run: Run, code: number): number | null {
  */
 function findDiameter(run: Run, name: string, number: number | null): number {
   const { block, machine, shop } = run;
-  const { offsets, tools } = shop.setup;
+  const { tools } = shop.setup;
   if (number === 0) return 0;
   const held = machine.held.number;
   // With nothing in the spindle there is no number of its own, as with a tool that is not known.
   const own = held ? ownDiameterNumber(shop, held) : undefined;
-  const diameter = offsets.diameter[String(number ?? own)];
+  const diameter = run.diameters.get(number ?? own ?? NaN);
   if (diameter !== undefined) return diameter;
   const facts = { letter: 'D', value: number ?? own ?? 0 };
   if (number !== null) {
