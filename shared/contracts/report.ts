@@ -6,6 +6,11 @@ export const severitySchema = z.enum(['stop', 'hold', 'note']);
 export const verdictSchema = z.enum(['stopped', 'held', 'clear']);
 export const countsSchema = z.strictObject({ stop: whole, hold: whole, note: whole });
 const columns = z.tuple([whole, whole]);
+const within = z.strictObject({
+  text: z.string(),
+  line: whole.min(1),
+  columns: columns.optional(),
+});
 export type FindingValueDocument =
   string | number | boolean | null | readonly FindingValueDocument[];
 const findingValue: z.ZodType<FindingValueDocument> = z.lazy(() =>
@@ -20,10 +25,17 @@ export const findingSchema = z.strictObject({
   worstLine: whole.min(1),
   count: whole.min(1),
   columns: columns.optional(),
-  within: z
-    .strictObject({ text: z.string(), line: whole.min(1), columns: columns.optional() })
-    .optional(),
+  within: within.optional(),
   blockDelete: z.literal('on').optional(),
+  assumed: z
+    .array(
+      z.strictObject({
+        line: whole.min(1),
+        within: within.optional(),
+        condition: z.string().min(1),
+      }),
+    )
+    .optional(),
   tool: whole.optional(),
   folded: whole.optional(),
   hold: z.enum(['look', 'judge']).optional(),

@@ -1,12 +1,14 @@
+import type { Decision } from './flow/decisions';
 import type { Observer } from './interpreter/events';
-import { Walk } from './interpreter/walk';
+import { Reading } from './reading';
 import { openReport } from './report/open-report';
-import type { Report } from './report/report';
+import type { Assumption, Report } from './report/report';
 import { openSha256 } from './report/sha256';
 import { RULES } from './rules/catalogue';
 import type { CutMemory, Rule } from './rules/rule';
 import type { Setup } from './shop/setup';
 import { openShop, type Shop } from './shop/shop';
+import { utf8 } from './source/utf8';
 
 export interface CheckOptions {
   /** Opens what is called beside the rules, on the walk that reads `/` blocks as run; anew if that begins again. */
@@ -21,11 +23,17 @@ export interface CheckOptions {
   readonly blockDelete?: 'on' | undefined;
 }
 
-/** One check of one program. Memory does not grow with the program. */
+/**
+ * One check of one program. Memory does not grow with the program, unless its blocks are not run in the order of
+ * the text: then that is kept whole, up to a limit.
+ */
 export interface Check {
   /** Any chunking of the program's bytes. */
   push(bytes: Uint8Array): void;
-  /** 'read-again': push all bytes once more, then call this again; it may be asked for several times. */
+  /**
+   * 'read-again': the program has `/` blocks, or its blocks are not run in the order of the text; push all
+   * bytes once more, then call this again. It may ask more than once.
+   */
   endOfText(): 'done' | 'read-again';
   /** Of the reading now going on. */
   readonly linesRead: number;
@@ -43,71 +51,84 @@ export function startCheck(setup: Setup, options: CheckOptions = {}): Check {
   const shop = openShop(setup);
   const digest = options.digests === false ? undefined : openSha256();
   const cuts = { isKept: false, isWanted: false, want: () => void (cuts.isWanted = true) };
-  let reading = openReading(shop, options, cuts);
+  let gathered = openGathered(shop, options, cuts);
   let isFirstTime = true;
   let bytes = 0;
-  let bytesRead = 0;
   let isDone = false;
   return {
     push(chunk) {
       if (isDone)
         throw new Error('The check has read the whole program; nothing more can be pushed.');
-      bytesRead += chunk.length;
       if (isFirstTime) {
         bytes += chunk.length;
         digest?.push(chunk);
       }
-      if (!cuts.isWanted) reading.current.push(chunk);
+      gathered.reading.push(chunk, cuts.isWanted);
     },
     endOfText() {
-      bytesRead = 0;
       isFirstTime = false;
-      if (!cuts.isWanted) isDone = reading.endOfText() === 'done';
+      if (!cuts.isWanted) isDone = gathered.endOfText() === 'done';
       // Only now it is known that the walk should have remembered where it cut: it all begins again.
       if (cuts.isWanted) {
         cuts.isWanted = false;
         cuts.isKept = true;
         isDone = false;
-        reading = openReading(shop, options, cuts);
+        gathered = openGathered(shop, options, cuts);
       }
       return isDone ? 'done' : 'read-again';
     },
     get linesRead() {
-      return reading.current.linesRead;
+      return gathered.reading.linesRead;
     },
     get bytesRead() {
-      return bytesRead;
+      return gathered.reading.bytesRead;
     },
     report({ name, sha256 }) {
       if (!isDone) throw new Error('The report is asked for before the end of the text.');
-      return reading.finish({ name, sha256: sha256 ?? digest?.hex() ?? '', bytes });
+      return gathered.finish({ name, sha256: sha256 ?? digest?.hex() ?? '', bytes });
     },
   };
 }
 
-/** One reading of the whole text, and a second one of it where there are `/` blocks. */
-function openReading(shop: Shop, options: CheckOptions, cuts: CutMemory) {
+/** A reading of the program with what is gathered from all of its walks. */
+function openGathered(shop: Shop, options: CheckOptions, cuts: CutMemory) {
   const gathering = openReport(shop, options.rules ?? RULES, cuts);
   const observers = [...gathering.observers, ...(options.observe?.() ?? [])];
   const skips = options.blockDelete === 'on';
-  const { isAlwaysLoud } = options;
-  const first = new Walk(shop, observers, { skips, isAlwaysLoud });
-  let current = first;
+  const reading = new Reading(shop, observers, { skips, isAlwaysLoud: options.isAlwaysLoud });
+  const first = reading.walk;
+  const walkOthers = (which: 'run' | 'skipped') => {
+    const made = reading.walkOthers((assumed) =>
+      gathering.openOtherWalk(which, () => assumed().map(assumption)),
+    );
+    gathering.assume(which, made.map(assumption));
+  };
   return {
-    get current() {
-      return current;
-    },
+    reading,
     endOfText(): 'done' | 'read-again' {
-      current.endOfText();
-      if (current !== first || !first.firstSkippable || skips) return 'done';
-      current = new Walk(shop, gathering.openSecondWalk(), { skips: true, isAlwaysLoud });
-      return 'read-again';
+      if (reading.end() === 'read-again') return 'read-again';
+      if (reading.walk === first) {
+        walkOthers('run');
+        if (!first.firstSkippable || skips) return 'done';
+        if (reading.beginSkipping(gathering.openSecondWalk()) === 'read-again') return 'read-again';
+      }
+      walkOthers('skipped');
+      return 'done';
     },
     finish(program: { readonly name: string; readonly sha256: string; readonly bytes: number }) {
-      const { linesRead: lines, blocks, firstSkippable, movesAtBounds } = first;
+      const { linesRead: lines, blocks, firstSkippable } = first;
+      const { movesAtBounds } = reading;
       return gathering.finish({ ...program, lines, blocks, firstSkippable, movesAtBounds });
     },
   };
+}
+
+/** What a walk took for granted, as a report says it. */
+function assumption({ place, condition, holds }: Decision): Assumption {
+  const { line, within } = place;
+  const words = `${condition} ${holds ? 'holds' : 'does not hold'}`;
+  if (!within) return { line, condition: words };
+  return { line, within: { text: within.text, line: within.line }, condition: words };
 }
 
 /** The whole of it at once, for tests and small texts. */
@@ -121,29 +142,4 @@ export function checkProgram(
   do check.push(bytes);
   while (check.endOfText() === 'read-again');
   return check.report({ name });
-}
-
-/** UTF-8 without a host; a lone surrogate becomes the replacement character. */
-export function utf8(text: string): Uint8Array {
-  const bytes = new Uint8Array(text.length * 3);
-  let length = 0;
-  for (const character of text) {
-    let point = character.codePointAt(0)!;
-    if (0xd800 <= point && point <= 0xdfff) point = 0xfffd;
-    if (point < 0x80) bytes[length++] = point;
-    else if (point < 0x800) {
-      bytes[length++] = 0xc0 | (point >> 6);
-      bytes[length++] = 0x80 | (point & 63);
-    } else if (point < 0x10000) {
-      bytes[length++] = 0xe0 | (point >> 12);
-      bytes[length++] = 0x80 | ((point >> 6) & 63);
-      bytes[length++] = 0x80 | (point & 63);
-    } else {
-      bytes[length++] = 0xf0 | (point >> 18);
-      bytes[length++] = 0x80 | ((point >> 12) & 63);
-      bytes[length++] = 0x80 | ((point >> 6) & 63);
-      bytes[length++] = 0x80 | (point & 63);
-    }
-  }
-  return bytes.slice(0, length);
 }

@@ -1,5 +1,5 @@
 import type { Motion, MachineState, Observer, ToolChangedEvent } from './interpreter/events';
-import { Walk } from './interpreter/walk';
+import { Reading } from './reading';
 import type { Within } from './report/report';
 import type { Setup } from './shop/setup';
 import { openShop } from './shop/shop';
@@ -28,7 +28,8 @@ export interface TraceMotion {
 
 export interface Trace {
   push(bytes: Uint8Array): void;
-  endOfText(): void;
+  /** 'read-again': the blocks are not run in the order of the text; push all bytes once more, then call again. */
+  endOfText(): 'done' | 'read-again';
 }
 
 export interface TraceOptions {
@@ -44,16 +45,11 @@ export function startTrace(
   emit: ((motion: TraceMotion) => void) | undefined,
   options: TraceOptions = {},
 ): Trace {
-  const walk = new Walk(
-    openShop(setup),
-    [...(emit ? [traceObserver(emit)] : []), ...(options.observers ?? [])],
-    {
-      skips: options.blockDelete === 'on',
-    },
-  );
+  const observers = [...(emit ? [traceObserver(emit)] : []), ...(options.observers ?? [])];
+  const reading = new Reading(openShop(setup), observers, { skips: options.blockDelete === 'on' });
   return {
-    push: (bytes) => walk.push(bytes),
-    endOfText: () => walk.endOfText(),
+    push: (bytes) => reading.push(bytes),
+    endOfText: () => (reading.end() === 'read-again' ? 'read-again' : 'done'),
   };
 }
 

@@ -25,7 +25,14 @@ const ENGINE_STAGES: Readonly<Record<string, readonly string[]>> = {
   ],
   'shared/engine/expressions/': ['shared/engine/lexer/'],
   'shared/engine/statements/': ['shared/engine/expressions/', 'shared/engine/lexer/'],
+  'shared/engine/flow/': [
+    'shared/engine/statements/',
+    'shared/engine/expressions/',
+    'shared/engine/lexer/',
+    'shared/engine/source/',
+  ],
   'shared/engine/interpreter/': [
+    'shared/engine/flow/',
     'shared/engine/statements/',
     'shared/engine/parameters/',
     'shared/engine/expressions/',

@@ -23,8 +23,8 @@ function arcOf(radius: number, start: number, turn: number): Motion {
   let arc: Motion | undefined;
   const observer = { motion: (motion: Motion) => void (arc = { ...motion }) };
   const trace = startTrace(setup, undefined, { observers: [observer] });
-  trace.push(new TextEncoder().encode(program.join('\n')));
-  trace.endOfText();
+  do trace.push(new TextEncoder().encode(program.join('\n')));
+  while (trace.endOfText() === 'read-again');
   return arc!;
 }
 

@@ -19,8 +19,8 @@ export function traceOf(program: string | readonly string[], setup: Setup): Trac
   const motions: TraceMotion[] = [];
   const trace = startTrace(setup, (motion) => motions.push(motion));
   const text = typeof program === 'string' ? program : program.join('\n');
-  trace.push(new TextEncoder().encode(text));
-  trace.endOfText();
+  do trace.push(new TextEncoder().encode(text));
+  while (trace.endOfText() === 'read-again');
   return motions;
 }
 

@@ -88,8 +88,8 @@ function endsByLine(program: string, setup: ReturnType<typeof testSetup>): Map<n
     },
   };
   const trace = startTrace(setup, () => undefined, { observers: [observer] });
-  trace.push(new TextEncoder().encode(program));
-  trace.endOfText();
+  do trace.push(new TextEncoder().encode(program));
+  while (trace.endOfText() === 'read-again');
   return ends;
 }
 

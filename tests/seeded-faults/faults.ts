@@ -51,6 +51,26 @@ export const FAULTS: readonly Fault[] = [
     severity: 'stop',
   },
   {
+    rule: 'subprogram-missing',
+    story: 'a call left in, its subprogram left out',
+    text: added('N75', 'M98 P8100'),
+    severity: 'stop',
+  },
+  {
+    rule: 'subprogram-loop',
+    story: 'the last line of a subprogram calls it again',
+    text: added('N75', 'o8100 sub', 'G53 G0 Z0', 'o8100 call', 'o8100 endsub', 'o8100 call'),
+    line: lineOf('N75') + 3,
+    severity: 'stop',
+  },
+  {
+    rule: 'never-ends',
+    story: 'the counter of a loop is not counted',
+    text: added('N190', '#1=0', 'o1 while [#1 LT 3]', 'G4 P1', 'o1 endwhile'),
+    line: lineOf('N190') + 2,
+    severity: 'stop',
+  },
+  {
     rule: 'raises-alarm',
     story: 'an alarm left in from trying out',
     text: added('N125', '#3000=1 (TRY)'),

@@ -23,7 +23,7 @@ export function parametersAfter(row: Row, setup: Setup): Readonly<Record<string,
     },
   };
   const trace = startTrace(setup, () => undefined, { observers: [observer] });
-  trace.push(new TextEncoder().encode(program));
-  trace.endOfText();
+  do trace.push(new TextEncoder().encode(program));
+  while (trace.endOfText() === 'read-again');
   return Object.fromEntries(numbers.map((number, index) => [number, reached[index] ?? NaN]));
 }

@@ -390,7 +390,7 @@ describe('what is not modelled', () => {
     ['G5 X5\nG0 X6', ['1 1-3 not-modelled G5', '2 rapid X5 Y0 Z0 → X6 Y0 Z0']],
     // Axis words of a setting code are no end.
     ['G68 X5 Y5 R45\nG0 X6', ['1 1-4 not-modelled G68', '2 rapid X0 Y0 Z0 → X6 Y0 Z0']],
-    ['M98 P100', ['1 1-4 not-modelled call']],
+    ['M98 P100', ['1 1-9 subprogram-missing call']],
     ['G0 X#1\nX2', ['1 4-7 not-modelled depends', '2 rapid X0 Y0 Z0 → X2 Y0 Z0']],
     ['M250', ['1 1-5 not-modelled M250']],
   ])('%j', (program, events) => {

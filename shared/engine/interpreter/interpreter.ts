@@ -7,7 +7,7 @@ import { NO_CYCLE } from './cycle-words';
 import { drill, isCycle } from './cycles';
 import { doDeeds } from './declared-codes';
 import { dwell } from './dwell';
-import { endProgram, stopProgram } from './ends';
+import { endProgram, returnFromProgram, stopProgram } from './ends';
 import { feedOf } from './feed';
 import { NO_MOTION, SETTING } from './machine';
 import * as modal from './modal-words';
@@ -248,6 +248,6 @@ function carryOutStop(run: Run): void {
   const code = run.block.codes[GROUP.stop]!;
   if (code === 20) endProgram(run, 'M2');
   else if (code === 300) endProgram(run, 'M30');
-  else if (code === 990) endProgram(run, 'M99');
+  else if (code === 990) returnFromProgram(run);
   else stopProgram(run, code === 0 ? 'M0' : code === 10 ? 'M1' : 'M60');
 }

@@ -43,6 +43,8 @@ export const NO_MOTION = 800;
  */
 export class Machine implements MachineState {
   line = 1;
+  /** The place within a text of the setup that is read now; `line` is then the block that called it. */
+  within: { readonly text: string; readonly line: number } | undefined = undefined;
   unit = 0.5;
   planeIndex = 0;
   isAbsolute = true;
@@ -105,7 +107,7 @@ export class Machine implements MachineState {
     const { settings } = this;
     const at = setting * KEPT;
     settings[at] = this.line;
-    if (word < 0) {
+    if (word < 0 || this.within) {
       settings[at + 1] = 0;
       return;
     }
@@ -144,8 +146,10 @@ export class Machine implements MachineState {
 
   place(words?: Words): Place {
     const range = this.rangeOf(words);
-    if (!range) return { line: this.line };
-    return { line: this.line, columns: columnsOf(this.block.words, range[0], range[1]) };
+    const { line, within } = this;
+    const columns = range && columnsOf(this.block.words, range[0], range[1]);
+    if (within) return { line, within: columns ? { ...within, columns } : within };
+    return columns ? { line, columns } : { line };
   }
 
   private rangeOf(asked: Words | undefined): readonly [number, number] | undefined {

@@ -58,6 +58,7 @@ export function openRun(shop: Shop, block: Block, observers: readonly Observer[]
     toldUnset: new Set(),
     loneMachineMove: undefined,
     callsMade: false,
+    isCalled: false,
     endedBy: '',
     refused: false,
   };

@@ -52,8 +52,10 @@ export interface Run {
   loneMachineMove: { readonly code: string; readonly place: Place } | undefined;
   /** Whether anything was called, so that blocks after the end may be what was called. */
   callsMade: boolean;
-  /** The end code met, or '' while the program runs. */
-  endedBy: '' | 'M2' | 'M30' | 'M99' | '%' | 'alarm';
+  /** Whether a subprogram is being run, so that M99 returns to what called it. */
+  isCalled: boolean;
+  /** The end code met, or '' while the program runs; 'endless' where a loop is never left. */
+  endedBy: '' | 'M2' | 'M30' | 'M99' | '%' | 'alarm' | 'endless';
   /** Whether the block has been refused part-way, so that nothing more of it is carried out. */
   refused: boolean;
 }

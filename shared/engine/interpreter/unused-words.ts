@@ -8,6 +8,8 @@ import { isCycle } from './cycles';
 export const RARE_LETTERS = letterBits('ABCDEHIJKLPQRUVW');
 const CENTRES = letterBits('IJKR');
 const CYCLE_WORDS = letterBits('RPQL');
+/** M99, whose P says where to return to. */
+const RETURN = 990;
 /** Letters of axes or devices this engine does not follow: of rotary axes it knows A alone. */
 const FOREIGN = letterBits('BCEUVW');
 /** With one of these beside them, an H or D of nought only says again that nothing is on. */
@@ -69,6 +71,7 @@ function usedBy({ block, controller }: Run, motion: number): number {
   if (block.hasGroup(GROUP.workOffset) && block.codes[GROUP.workOffset] === 541)
     used |= letterBits('P');
   if (block.hasGroup(GROUP.path)) used |= letterBits('PQ');
+  if (block.hasGroup(GROUP.stop) && block.codes[GROUP.stop] === RETURN) used |= letterBits('P');
   return used;
 }
 

@@ -18,7 +18,12 @@ describe('how a program begins and ends', () => {
     ['M30\n(NOTE)\n\n%', ['1 end M30', '1 block']],
     ['%\nG21\n%\nG0 X1', ['2 block', '3 end %', '4 1-6 text-after-end', '4 missing-end']],
     // What was called from above may stand after the end.
-    ['M98 P5\nM30\nO5\nG0 X1\nM99', ['1 1-4 not-modelled call', '1 block', '2 end M30', '2 block']],
+    [
+      'M98 P5\nM30\nO5\nG0 X1\nM99',
+      ['1 block', '3 block', '4 block', '5 block', '2 end M30', '2 block'],
+    ],
+    // A subprogram that nothing calls never runs.
+    ['M30\nO5\nG0 X1\nM99', ['1 end M30', '1 block', '2 text-after-end']],
     ['G21\n\n(LAST)\n', ['1 block', '3 missing-end', '3 end end-of-text']],
     ['%\nG21', ['2 block', '2 cut-short percent', '2 missing-end', '2 end end-of-text']],
     [

@@ -1,22 +1,27 @@
-import { Block } from '../blocks/block';
+import { Block, LETTER, type OtherCode } from '../blocks/block';
 import { addCode, parseBlock, refuseLineComments } from '../blocks/parse-block';
 import { codeName, groupTables } from '../blocks/code-groups';
+import type { Bounds } from '../expressions/value';
+import { LARGEST_KEPT } from '../flow/limits';
 import { LineWords } from '../lexer/line-words';
 import { readLine } from '../lexer/read-line';
 import type { Shop } from '../shop/shop';
 import { readStatement } from '../statements/read-statement';
 import type { Statement } from '../statements/statement';
 import { LONGEST_LINE, LineSource, type LineReader } from '../source/line-source';
+import { callOf, findCall, makeCall, readCall, takeCallOut } from './call-words';
 import { findDeclared } from './declared-codes';
 import { endProgram } from './ends';
-import type { Observer, Place } from './events';
+import type { Observer, Place, Problem } from './events';
+import { Follower, type Kept, type LineTaker } from './follower';
 import { carryOut } from './interpreter';
 import { QuietLines } from './quiet/quiet-lines';
 import { openRun } from './open-run';
-import { tellProblem, type Run } from './run';
+import { tellProblem, type Facts, type Run } from './run';
+import { decided, steer } from './steer';
 import { carryOutUnknown } from './unknown-codes';
 import { forgetUnknownWords } from './unknown-position';
-import { workOut } from './work-out';
+import { carryOutSettingsOf, workOut, workOutArguments } from './work-out';
 
 export interface WalkOptions {
   /** Whether blocks with a `/` in front are skipped. */
@@ -25,15 +30,28 @@ export interface WalkOptions {
   readonly isAlwaysLoud?: boolean | undefined;
 }
 
-/** One reading of a program: bytes in, events out. */
-export class Walk implements LineReader {
+/**
+ * One walk of a program: bytes in, events out. It streams for as long as every block is followed by the next one
+ * in the text. At the first block that leads elsewhere it pauses, and goes on from there once the whole text
+ * is at hand (`follow`), or once it is said that it never will be (`streamOn`).
+ */
+export class Walk implements LineReader, LineTaker {
   /** Lines begun so far. */
   linesRead = 0;
   /** Lines with at least one word, run or not. */
   blocks = 0;
   /** The first block with a `/` in front. */
   firstSkippable: Place | undefined;
-  private readonly source = new LineSource(this);
+  /** The line at which the walk waits for the whole text, else 0. */
+  pausedAt = 0;
+  /** What is followed over kept text, once it is. */
+  follower: Follower | undefined;
+  private source = new LineSource(this);
+  /** The line of an M99 P that was carried out before the walk paused. */
+  private returnsTo: number | undefined;
+  /** Where a walk that cannot follow takes up its streaming, and what it counted before. */
+  private streamsOnAt = 0;
+  private blocksBefore = 0;
   private readonly words = new LineWords();
   private readonly block = new Block(this.words);
   private readonly run: Run;
@@ -75,6 +93,45 @@ export class Walk implements LineReader {
   endOfText(): void {
     this.source.end();
     this.run.tell.quiet.flush();
+    if (this.pausedAt > 0) return;
+    if (this.streamsOnAt > 0) this.blocks = this.blocksBefore;
+    this.tellEnd();
+  }
+
+  /** Walks on over the whole text, from where it paused or from its beginning, and tells its end. */
+  follow(kept: Kept): void {
+    const { run } = this;
+    const follower = new Follower(run, this, kept, Math.max(1, this.pausedAt));
+    this.follower = follower;
+    this.isDone = false;
+    this.pausedAt = 0;
+    if (this.returnsTo !== undefined) follower.goRoundFromHere(this.returnsTo);
+    follower.walk();
+    this.blocks = kept.program.blocks;
+    this.linesRead = kept.program.text.lines;
+    this.lastWritten = kept.program.text.lastWritten;
+    if (run.endedBy !== '' && !SILENT_ENDS.includes(run.endedBy) && follower.findTextAfterEnd())
+      tellProblem(run, 'text-after-end', undefined, {});
+    run.machine.within = undefined;
+    this.tellEnd();
+  }
+
+  /** The text is too long to be kept: once it is pushed again, the walk goes on without following anything. */
+  streamOn(): void {
+    this.source = new LineSource(this);
+    this.streamsOnAt = this.pausedAt;
+    this.blocksBefore = this.blocks;
+    this.linesRead = 0;
+    this.pausedAt = 0;
+    this.isDone = false;
+  }
+
+  /** Tells what is only known once other walks of the program are over. */
+  tellLater(problem: Problem, place: Place, facts: Facts): void {
+    this.run.tell.problem({ problem, place, facts });
+  }
+
+  private tellEnd(): void {
     const { run } = this;
     const { machine, tell, endedBy } = run;
     this.words.clear();
@@ -92,6 +149,7 @@ export class Walk implements LineReader {
     const { words } = this;
     words.bytes = bytes;
     this.quietLines.forget();
+    if (this.linesRead + 1 < this.streamsOnAt) at = this.passOver(bytes, at, end);
     while (at < end) {
       if (!this.isLoud && this.quietLines.isOpen()) {
         at = this.readQuietLines(bytes, at, end);
@@ -99,9 +157,8 @@ export class Walk implements LineReader {
       }
       this.run.tell.quiet.flush();
       const next = readLine(bytes, at, words);
-      this.linesRead++;
-      if (words.end - at > LONGEST_LINE) this.tellOverlong(words.end - at);
-      else this.takeLine();
+      this.run.machine.line = ++this.linesRead;
+      this.takeLine();
       at = next;
     }
   }
@@ -122,8 +179,8 @@ export class Walk implements LineReader {
   }
 
   readOverlong(_bytes: Uint8Array, length: number): void {
-    this.linesRead++;
-    this.tellOverlong(length);
+    this.run.machine.line = ++this.linesRead;
+    if (this.linesRead >= this.streamsOnAt) this.tellOverlong(length);
   }
 
   readLast(bytes: Uint8Array, end: number): void {
@@ -131,10 +188,19 @@ export class Walk implements LineReader {
     this.readLines(bytes, 0, end);
   }
 
-  private tellOverlong(length: number): void {
+  /** Passes over what was walked before the walk paused. */
+  private passOver(bytes: Uint8Array, at: number, end: number): number {
+    while (at < end && this.linesRead + 1 < this.streamsOnAt) {
+      at = readLine(bytes, at, this.words);
+      this.linesRead++;
+    }
+    return at;
+  }
+
+  tellOverlong(length: number): void {
     const { words, run } = this;
     words.clear();
-    this.lastWritten = run.machine.line = this.linesRead;
+    this.lastWritten = run.machine.line;
     this.blocks++;
     this.isEmpty = false;
     if (this.isDone) return;
@@ -143,11 +209,11 @@ export class Walk implements LineReader {
     run.tell.block();
   }
 
-  private takeLine(): void {
+  takeLine(): void {
     const { words, run } = this;
     if (words.end === words.start) return;
-    run.machine.line = this.linesRead;
-    this.lastWritten = this.linesRead;
+    if (words.end - words.start > LONGEST_LINE) return this.tellOverlong(words.end - words.start);
+    this.lastWritten = run.machine.line;
     if (words.isRare) this.takeRareLine();
     else if (words.count > 0) {
       this.blocks++;
@@ -166,12 +232,37 @@ export class Walk implements LineReader {
     carryOut(run);
     run.tell.block();
     this.isCommentWaiting = false;
-    if (run.endedBy !== '') this.isDone = true;
+    if (run.endedBy !== '') this.end();
+  }
+
+  /** A return that names a line leads elsewhere, even in a main program. */
+  private end(): void {
+    const { run, block } = this;
+    if (this.follower) return;
+    this.isDone = true;
+    if (run.endedBy !== 'M99' || !block.has(LETTER.P)) return;
+    if (this.streamsOnAt > 0) {
+      this.tellNotFollowed('M99');
+      endProgram(run, 'M99');
+      return;
+    }
+    run.endedBy = '';
+    this.returnsTo = Math.round(block.value(LETTER.P));
+    this.pause();
+  }
+
+  private pause(): void {
+    this.pausedAt = this.run.machine.line;
+    this.isDone = true;
+  }
+
+  private get canFollow(): boolean {
+    return this.streamsOnAt === 0 && !this.run.dialect.isStrict;
   }
 
   private takeRareLine(): void {
     const { words, run } = this;
-    const statement = words.isStatement ? readStatement(words, run.grammar) : undefined;
+    const statement = words.isStatement ? this.readStatement() : undefined;
     if (words.percentAt >= 0) this.takePercent();
     if (words.comments.length > 0 && run.dialect.isStrict) refuseLineComments(words);
     const hasWords = words.count > 0 || words.faults.length > 0 || words.isStatement;
@@ -180,6 +271,15 @@ export class Walk implements LineReader {
       this.tellComments();
       this.isCommentWaiting = true;
     }
+  }
+
+  private readStatement(): Statement {
+    const { words, run, follower } = this;
+    const kept = follower?.keptStatement();
+    if (kept) return kept;
+    const statement = readStatement(words, run.grammar);
+    follower?.keepStatement(statement);
+    return statement;
   }
 
   private takeRareBlock(statement: Statement | undefined): void {
@@ -191,40 +291,110 @@ export class Walk implements LineReader {
       this.firstSkippable ??= run.machine.place({ bytes: [at, at + 1] });
       if (this.options.skips) return;
     }
-    if (statement) this.takeStatement(statement);
+    if (statement && !words.isVoid && this.steers(statement)) return;
+    const bounded = statement ? this.takeStatement(statement) : undefined;
+    if (this.pausedAt > 0) return;
     parseBlock(words, this.block, run.dialect);
     if (words.count > 0 || words.faults.length > 0) this.isEmpty = false;
-    this.finishRareBlock();
+    this.finishRareBlock(bounded);
   }
 
-  /** What computes is worked out into the block's words; what steers is named, and not followed yet. */
-  private takeStatement(statement: Statement): void {
+  /** Whether the line says which block comes next, and has been seen to. */
+  private steers({ flow }: Statement): boolean {
+    const { words, run, follower } = this;
+    if (!flow) return false;
+    if (flow.kind === 'labelled' && flow.keyword === 'program')
+      return follower?.takeProgramLabel() ?? false;
+    if (!this.canFollow) return false;
+    this.isEmpty = false;
+    if (follower) steer(run, follower, flow);
+    // A setting behind a decided condition needs no other line of the text.
+    else if (flow.kind !== 'then' || decided(run, flow.condition) === undefined) {
+      this.pause();
+      return true;
+    } else if (decided(run, flow.condition)) carryOutSettingsOf(run, flow.settings);
+    words.count = 0;
+    if (words.faults.length > 0) this.tellFaults();
+    if (words.comments.length > 0) this.tellComments();
+    run.tell.block();
+    if (run.endedBy !== '') this.end();
+    return true;
+  }
+
+  /** Works out what computes; gives the words of a call that are only known within bounds. */
+  private takeStatement(statement: Statement): ReadonlyMap<number, Bounds> | undefined {
     const { words, run } = this;
     const { flow, settings } = statement;
     const isLabel = flow?.kind === 'labelled' && flow.keyword === 'program';
+    let bounded: ReadonlyMap<number, Bounds> | undefined;
     if (settings.length > 0) this.isEmpty = false;
     if (flow && !isLabel)
       words.fault({
         problem: 'not-modelled',
         from: words.start + flow.from,
         to: words.start + flow.to,
-        facts: { what: words.text(words.start + flow.from, words.start + flow.to), reason: 'flow' },
+        facts: {
+          what: words.text(words.start + flow.from, words.start + flow.to),
+          ...this.notFollowedFacts(),
+        },
         voids: true,
       });
-    else if (!words.isVoid) workOut(run, statement);
+    else if (!words.isVoid) {
+      const code = callOf(run, statement);
+      if (code !== '' && this.canFollow && !this.follower) this.pause();
+      else if (code === 'G65') bounded = workOutArguments(run, statement);
+      else workOut(run, statement);
+    }
     // Of a block that is not carried out, words without a value would only be found faulty again.
     if (words.isVoid) words.count = 0;
+    return bounded;
   }
 
-  private finishRareBlock(): void {
-    const { words, run } = this;
-    if (this.block.others.length > 0) this.resolveOthers();
+  /** Why what steers is not followed: the published language does not know it, or the text is too long. */
+  private notFollowedFacts(): Readonly<Record<string, string | number>> {
+    if (this.streamsOnAt === 0) return { reason: 'flow' };
+    return { reason: 'flow-size', most: LARGEST_KEPT / (1024 * 1024) };
+  }
+
+  private tellNotFollowed(code: string): void {
+    tellProblem(this.run, 'not-modelled', { code }, { what: code, ...this.notFollowedFacts() });
+  }
+
+  private finishRareBlock(bounded?: ReadonlyMap<number, Bounds>): void {
+    const { words, run, block } = this;
+    const call = block.others.length > 0 && this.canFollow ? findCall(run) : undefined;
+    if (call && !this.follower) return this.pause();
+    if (call) return this.takeCall(call, bounded);
+    if (block.others.length > 0) this.resolveOthers();
     if (words.faults.length > 0) this.tellFaults();
     if (words.comments.length > 0) this.tellComments();
     if (words.isVoid) {
       forgetUnknownWords(run);
       run.tell.block();
     } else this.finishBlock();
+  }
+
+  /** A block that calls: what else stands in it is carried out first. */
+  private takeCall(code: OtherCode, bounded: ReadonlyMap<number, Bounds> | undefined): void {
+    const { words, run, block } = this;
+    const follower = this.follower!;
+    // Several sets of I, J and K are how a macro is given more than its letters hold.
+    const { faults } = words;
+    if (code.letter === 'G')
+      for (let at = faults.length - 1; at >= 0; at--)
+        if (faults[at]!.problem === 'repeated-word') faults.splice(at, 1);
+    const call = words.isVoid
+      ? undefined
+      : readCall(run, code, (word) => bounded?.get(word) ?? words.values[word]!);
+    takeCallOut(run, code);
+    if (block.others.length > 0) this.resolveOthers();
+    if (faults.length > 0) this.tellFaults();
+    if (words.comments.length > 0) this.tellComments();
+    if (words.isVoid) forgetUnknownWords(run);
+    else carryOut(run);
+    if (call && run.endedBy === '') makeCall(run, follower, call);
+    run.tell.block();
+    if (run.endedBy !== '') this.end();
   }
 
   /** A declared code whose conditions do not hold here keeps its built-in meaning. */
@@ -249,6 +419,7 @@ export class Walk implements LineReader {
   private takePercent(): void {
     if (this.isDone) return;
     const { run } = this;
+    if (run.isCalled) return this.follower!.takePercent();
     if (!this.isFramed && this.blocks === 0) {
       this.isFramed = true;
       return;
@@ -282,7 +453,8 @@ export class Walk implements LineReader {
 
   private tellTextAfter(): void {
     // What stands behind an alarm is not behind the program's end.
-    if (this.isTextAfterTold || this.run.callsMade || this.run.endedBy === 'alarm') return;
+    if (this.isTextAfterTold || this.run.callsMade || this.pausedAt > 0) return;
+    if (this.run.endedBy === 'alarm') return;
     this.isTextAfterTold = true;
     tellProblem(this.run, 'text-after-end', undefined, {});
   }
@@ -312,6 +484,9 @@ export class Walk implements LineReader {
     }
   }
 }
+
+/** Ends behind which nobody expects the text to be run. */
+const SILENT_ENDS: readonly string[] = ['alarm', 'endless'];
 
 /** NISTIR 6556 3.2.4: `MSG,` in any case, blanks allowed between. */
 const MESSAGE = /^[ \t]*m[ \t]*s[ \t]*g[ \t]*,/i;

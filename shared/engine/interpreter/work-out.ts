@@ -1,4 +1,4 @@
-import { letterBits, letterName } from '../blocks/block';
+import { LETTER, letterBits, letterName } from '../blocks/block';
 import {
   evaluate,
   isFailure,
@@ -7,8 +7,8 @@ import {
   type Worth,
 } from '../expressions/evaluate';
 import type { Expression } from '../expressions/expression';
-import { isBounds, type Value } from '../expressions/value';
-import { MOST_WORDS } from '../lexer/line-words';
+import { isBounds, type Bounds, type Value } from '../expressions/value';
+import { MOST_WORDS, type LineWords } from '../lexer/line-words';
 import { LARGEST } from '../lexer/rare-words';
 import type { ParameterKey } from '../parameters/parameter-name';
 import type { ComputedWord, Setting, Statement } from '../statements/statement';
@@ -35,6 +35,32 @@ export function workOut(run: Run, statement: Statement): void {
   if (words.isVoid) return forgetUnknownWords(run);
   store(run, assigned);
 }
+
+/**
+ * As workOut, for the words of a call: any of them may be known only within bounds. Gives the words that are,
+ * by their place in the line.
+ */
+export function workOutArguments(run: Run, statement: Statement): ReadonlyMap<number, Bounds> {
+  const { words } = run.block;
+  const bounded = new Map<number, Bounds>();
+  let count = 0;
+  for (const word of statement.words) {
+    const worth = evaluate(word.value, run.parameters, run.grammar);
+    if (worth === null || count >= MOST_WORDS) continue;
+    const isBounded = !isFailure(worth) && isBounds(worth);
+    const isArgument = isBounded && !NEVER_ARGUMENTS.includes(word.letter);
+    const value = isArgument ? worth.least : plainValue(run, word, worth);
+    if (isArgument) bounded.set(count, worth);
+    putWord(words, count++, word, value);
+  }
+  words.count = count;
+  const assigned = workOutSettings(run, statement.settings);
+  if (!words.isVoid) store(run, assigned);
+  return bounded;
+}
+
+/** Which program is called, and how often, has to be known. */
+const NEVER_ARGUMENTS: readonly number[] = [LETTER.G, LETTER.L, LETTER.M, LETTER.N, LETTER.P];
 
 /** What a condition, a target or an argument is worth; undefined, and a fault of the line, when nothing. */
 export function workOutValue(run: Run, expression: Expression, range: Range): Value | undefined {
@@ -64,14 +90,17 @@ function workOutWords(run: Run, written: readonly ComputedWord[]): void {
       unknown.push({ word: count, bounds: worth });
       of ||= worth.of;
     }
-    words.letters[count] = word.letter;
-    words.values[count] = value;
-    words.starts[count] = words.start + word.from;
-    words.ends[count] = words.start + word.to;
-    count++;
+    putWord(words, count++, word, value);
   }
   words.count = count;
   if (unknown.length > 0 && !words.isVoid) noteUnknownWords(run, unknown, of);
+}
+
+function putWord(words: LineWords, at: number, word: ComputedWord, value: number): void {
+  words.letters[at] = word.letter;
+  words.values[at] = value;
+  words.starts[at] = words.start + word.from;
+  words.ends[at] = words.start + word.to;
 }
 
 /** One number for the block to go by; a word that has none voids it. */

@@ -1,7 +1,7 @@
 import type { Failure, ParameterReader } from '../expressions/evaluate';
 import { EVERYTHING } from '../expressions/interval';
 import type { Grammar } from '../expressions/grammar';
-import type { Value } from '../expressions/value';
+import { isBounds, type Value } from '../expressions/value';
 import { showParameter, type ParameterKey } from './parameter-name';
 
 /** A parameter that is not stored but read off the machine, each time it is asked for. */
@@ -36,6 +36,8 @@ const SUBROUTINE_LOCALS = 30;
  *   will read, and a check that took nought for it would be clear on a guess. The setup can state it.
  */
 export class ParameterStore implements ParameterReader {
+  /** Counts what has been stored that was not there before: while it stands still, so does all that is read. */
+  version = 0;
   private readonly numbers = new Map<number, Value>();
   private readonly globals = new Map<string, Value>();
   private readonly levels: Level[] = [{ numbers: new Map(), names: new Map() }];
@@ -80,11 +82,12 @@ export class ParameterStore implements ParameterReader {
   set(key: ParameterKey, value: Value): Failure | undefined {
     const live = this.live.get(key);
     if (live) {
+      this.version++;
       const refused = live.write ? live.write(value) : 'system';
       return refused && { reason: refused, what: showParameter(key) };
     }
     if (typeof key === 'string') {
-      this.namesOf(key).set(key, value);
+      this.put(this.namesOf(key), key, value);
       return undefined;
     }
     if (!this.hasNumber(key)) return outside(key);
@@ -92,8 +95,14 @@ export class ParameterStore implements ParameterReader {
     const firstSystem = this.grammar.isMacro ? FIRST_SYSTEM : HIGHEST_PUBLISHED + 1;
     if (key >= firstSystem && !this.stated.has(key))
       return { reason: 'system', what: showParameter(key) };
-    this.placeOf(key).set(key, value);
+    this.put(this.placeOf(key), key, value);
     return undefined;
+  }
+
+  private put<Key>(into: Map<Key, Value>, key: Key, value: Value): void {
+    const before = into.get(key);
+    if (before === undefined || !isSame(before, value)) this.version++;
+    into.set(key, value);
   }
 
   /** G65: local variables of its own, those not given null (facts sheet 12.1.7). */
@@ -149,6 +158,11 @@ export class ParameterStore implements ParameterReader {
 
 /** Facts sheet 12.2.4: names with an underscore in front are the same in every subroutine. */
 const isGlobal = (name: string): boolean => name.startsWith('_');
+
+function isSame(one: Value, other: Value): boolean {
+  if (one === null || other === null || !isBounds(one) || !isBounds(other)) return one === other;
+  return one.least === other.least && one.greatest === other.greatest && one.of === other.of;
+}
 
 const outside = (number: number): Failure => ({
   reason: 'parameter-number',

@@ -1,7 +1,7 @@
 import type { MachineState, Observer, Place } from '../interpreter/events';
 import type { CutMemory, FindingDraft, Reporter, Rule } from '../rules/rule';
 import type { Setup } from '../shop/setup';
-import type { FindingData, Severity } from './report';
+import type { Assumption, FindingData, Severity } from './report';
 import { roundData } from './rounding';
 import { worseOf } from './severity';
 
@@ -19,6 +19,8 @@ export interface Episode {
   worstBy: number;
   worstData: FindingData;
   count: number;
+  /** Where not every walk finds it: what the walk that does had assumed. */
+  readonly assumed?: readonly Assumption[] | undefined;
 }
 /** What of a rule no longer stands on its own, once it has found too many. */
 export interface Fold {

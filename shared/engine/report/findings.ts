@@ -3,6 +3,7 @@ import type { LengthWords } from '../rules/rule';
 import { episodeData, episodeKey, FINDINGS_A_RULE, type Episode, type Fold } from './episodes';
 import type { Gathered } from './episodes';
 import { wordFold } from './fold-words';
+import { covers, foldKey, groupByKey } from './merge-walks';
 import type { Columns, Finding, Severity } from './report';
 import { severityRank } from './severity';
 
@@ -29,13 +30,7 @@ export function listFindings(
 }
 
 function onlyWhenSkipped(run: Gathered, skipped: Gathered): Gathered {
-  const known = new Map<string, Episode[]>();
-  for (const episode of run.episodes) {
-    const key = episodeKey(episode);
-    const like = known.get(key);
-    if (like) like.push(episode);
-    else known.set(key, [episode]);
-  }
+  const known = groupByKey(run.episodes);
   const folded = new Set(run.folds.map(foldKey));
   return {
     episodes: skipped.episodes.filter((episode) => {
@@ -46,34 +41,27 @@ function onlyWhenSkipped(run: Gathered, skipped: Gathered): Gathered {
   };
 }
 
-function covers(known: Episode, other: Episode): boolean {
-  return (
-    known.first.line <= other.first.line &&
-    other.endLine <= known.endLine &&
-    !(known.worstBy < other.worstBy)
-  );
-}
-
-function foldKey(one: Pick<Fold, 'rule' | 'severity' | 'unattended'>): string {
-  return `${one.rule.id} ${one.severity} ${one.unattended}`;
-}
-
-/** The limit of findings a rule counts both walks: what the second adds beyond it folds. */
+/** The limit of findings a rule counts all walks: what later ones add beyond it folds. */
 function capTogether(run: Gathered, only: Gathered) {
   const counts = new Map<string, number>();
-  for (const { rule } of run.episodes) counts.set(rule.id, (counts.get(rule.id) ?? 0) + 1);
-  const kept: Episode[] = [];
-  const folds = new Map<string, Fold>(only.folds.map((fold) => [foldKey(fold), { ...fold }]));
-  for (const episode of only.episodes) {
+  const first = capOne(run, counts);
+  const second = capOne(only, counts);
+  return {
+    kept: { run: first.episodes, only: second.episodes },
+    folds: { run: first.folds, only: second.folds },
+  };
+}
+
+function capOne(gathered: Gathered, counts: Map<string, number>): Gathered {
+  const episodes: Episode[] = [];
+  const folds = new Map<string, Fold>(gathered.folds.map((fold) => [foldKey(fold), { ...fold }]));
+  for (const episode of gathered.episodes) {
     const count = (counts.get(episode.rule.id) ?? 0) + 1;
     counts.set(episode.rule.id, count);
-    if (count <= FINDINGS_A_RULE) kept.push(episode);
+    if (count <= FINDINGS_A_RULE) episodes.push(episode);
     else addTo(folds, episode);
   }
-  return {
-    kept: { run: run.episodes, only: kept },
-    folds: { run: run.folds, only: [...folds.values()] },
-  };
+  return { episodes, folds: [...folds.values()] };
 }
 
 function addTo(folds: Map<string, Fold>, episode: Episode): void {
@@ -103,6 +91,7 @@ function describe(episode: Episode, blockDelete: 'on' | undefined, lengths: Leng
     columns: first.columns,
     within: withinInOrder(first),
     blockDelete,
+    assumed: episode.assumed,
     tool: tool === null || tool === 0 ? undefined : tool,
     ...rule.word(data, lengths),
     data,
@@ -137,7 +126,8 @@ function judged({ rule, severity, unattended }: Pick<Fold, 'rule' | 'severity' |
 /** Optional keys are left out, not written as undefined; the rest stand as the contract lists them. */
 function inContractOrder(finding: Finding): Finding {
   const { rule, severity, unattended, line, endLine, worstLine, count } = finding;
-  const { columns, within, blockDelete, tool, folded, hold, message, advice, data } = finding;
+  const { columns, within, blockDelete, assumed, tool, folded, hold } = finding;
+  const { message, advice, data } = finding;
   return {
     rule,
     severity,
@@ -149,6 +139,7 @@ function inContractOrder(finding: Finding): Finding {
     ...(columns && { columns }),
     ...(within && { within }),
     ...(blockDelete && { blockDelete }),
+    ...(assumed && { assumed }),
     ...(tool !== undefined && { tool }),
     ...(folded !== undefined && { folded }),
     ...(hold && { hold }),

@@ -8,7 +8,8 @@ import { countLinesNotModelled } from './coverage';
 import { beginEpisode, openEpisodes, type Episode } from './episodes';
 import { listFindings, unattendedSeverities } from './findings';
 import { lengthWords } from './length-words';
-import type { Report } from './report';
+import { mergeWalks } from './merge-walks';
+import type { Assumption, Report } from './report';
 import { countSeverities, verdictOf } from './severity';
 import { sha256Hex } from './sha256';
 import { gatherSummaries } from './summaries';
@@ -24,6 +25,7 @@ import { gatherWalkFacts } from './walk-facts';
  *     walk(program, gathering.observers);                  // every `/` block read as run
  *     if (program has a `/` block)
  *       walk(program, gathering.openSecondWalk());         // every `/` block skipped
+ *     walk(program, gathering.openOtherWalk('run', …));    // for each other outcome of a condition
  *     return gathering.finish({ name, sha256, bytes, lines, blocks, firstSkippable });
  *
  * The observers stand in the order in which they are to be called; the last one counts blocks and has
@@ -34,6 +36,13 @@ export interface ReportInProgress {
   readonly observers: readonly Observer[];
   /** Observers for the walk that skips `/` blocks, with a state of their own. Called at most once. */
   openSecondWalk(): readonly Observer[];
+  /** Observers for a walk of the same reading that takes something else for granted; `assumed` says what. */
+  openOtherWalk(
+    reading: 'run' | 'skipped',
+    assumed: () => readonly Assumption[],
+  ): readonly Observer[];
+  /** What the reading's own walk took for granted. */
+  assume(reading: 'run' | 'skipped', assumed: readonly Assumption[]): void;
   finish(read: ProgramRead): Report;
 }
 
@@ -56,6 +65,16 @@ export interface ProgramRead {
 export function openReport(shop: Shop, rules: readonly Rule[], cuts: CutMemory): ReportInProgress {
   const run = openWalk(shop, rules, cuts);
   let skipped: Walk | undefined;
+  const others: Record<'run' | 'skipped', OtherWalk[]> = { run: [], skipped: [] };
+  const assumed: Record<'run' | 'skipped', readonly Assumption[]> = { run: [], skipped: [] };
+  const merge = (reading: 'run' | 'skipped', { book }: Walk) =>
+    mergeWalks([
+      { gathered: book.gathered(), assumed: assumed[reading] },
+      ...others[reading].map((other) => ({
+        gathered: other.walk.book.gathered(),
+        assumed: other.assumed(),
+      })),
+    ]);
   const coverage = countLinesNotModelled();
   const summaries = gatherSummaries(shop);
   return {
@@ -64,10 +83,18 @@ export function openReport(shop: Shop, rules: readonly Rule[], cuts: CutMemory):
       skipped = openWalk(shop, rules, cuts);
       return [...skipped.before, ...skipped.after];
     },
+    openOtherWalk(reading, assumes) {
+      const walk = openWalk(shop, rules, cuts);
+      others[reading].push({ walk, assumed: assumes });
+      return [...walk.before, coverage, ...walk.after];
+    },
+    assume(reading, made) {
+      assumed[reading] = made;
+    },
     finish(read) {
       const findings = listFindings(
-        run.book.gathered(),
-        skipped?.book.gathered(),
+        merge('run', run),
+        skipped && merge('skipped', skipped),
         skipped ? compareWalks(shop, rules, run, skipped, read) : [],
         lengthWords('both'),
       );
@@ -106,6 +133,10 @@ export function openReport(shop: Shop, rules: readonly Rule[], cuts: CutMemory):
 }
 
 type Walk = ReturnType<typeof openWalk>;
+interface OtherWalk {
+  readonly walk: Walk;
+  readonly assumed: () => readonly Assumption[];
+}
 
 function openWalk(shop: Shop, rules: readonly Rule[], cuts: CutMemory) {
   const book = openEpisodes(shop.setup, cuts);

@@ -64,6 +64,12 @@ export type Columns = readonly [number, number];
 export type FindingValue = string | number | boolean | null | readonly FindingValue[];
 /** Every figure a finding's sentence uses, mm and s, so that a client can word it in its own unit. */
 export type FindingData = Readonly<Record<string, FindingValue>>;
+/** The outcome of a condition that nothing decides before the run, in words: '[#500 GT 3] holds'. */
+export interface Assumption {
+  readonly line: number;
+  readonly within?: Within | undefined;
+  readonly condition: string;
+}
 export interface Finding {
   readonly rule: string;
   readonly severity: Severity;
@@ -78,6 +84,8 @@ export interface Finding {
   readonly within?: Within | undefined;
   /** Present when only the walk that skips `/` blocks finds it. */
   readonly blockDelete?: 'on' | undefined;
+  /** Present where it is found only if what is not known before the run turns out so. */
+  readonly assumed?: readonly Assumption[] | undefined;
   readonly tool?: number | undefined;
   /** How many further findings of this rule are folded into this one. */
   readonly folded?: number | undefined;

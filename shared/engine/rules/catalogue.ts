@@ -94,6 +94,9 @@ import { handWork } from './hand-work';
 import { pauseInProgram } from './pause-in-program';
 import { probeInProgram } from './probe-in-program';
 import { raisesAlarm } from './raises-alarm';
+import { neverEnds } from './never-ends';
+import { subprogramLoop } from './subprogram-loop';
+import { subprogramMissing } from './subprogram-missing';
 import type { Rule } from './rule';
 
 /** Every rule, alphabetical within its group; one import line and one entry line a rule. */
@@ -108,12 +111,15 @@ export const RULES: readonly Rule[] = [
   missingWord,
   modalConflict,
   nestedComment,
+  neverEnds,
   noDecimalPoint,
   notModelled,
   oddCharacters,
   outOfRangeWord,
   raisesAlarm,
   repeatedWord,
+  subprogramLoop,
+  subprogramMissing,
   textAfterEnd,
   unreadableBlock,
   // state

@@ -51,13 +51,25 @@ M30
   );
 });
 
-test('flags flow words', () => {
+test('flags flow words that have no place in the published language', () => {
+  checkRule(
+    notModelled,
+    { controller: { switches: { strict: true } } },
+    `
+o100 sub
+^^^^^^^^ not-modelled: o100 sub steers the order of the blocks, which this check does not follow.
+M30
+`,
+  );
+});
+
+test('flags a modal call, which is not followed', () => {
   checkRule(
     notModelled,
     {},
     `
-o100 sub
-^^^^^^^^ not-modelled: o100 sub steers the order of the blocks, which this check does not follow.
+G66 P100 A1
+^^^ not-modelled: G66 calls another program, which this check does not follow.
 M30
 `,
   );

@@ -1,4 +1,4 @@
-import { text } from './finding-data';
+import { figure, text } from './finding-data';
 import { reportProblem } from './report-problem';
 import { defineRule } from './rule';
 
@@ -24,6 +24,10 @@ function describe(data: Parameters<typeof text>[0]): string {
   switch (text(data, 'reason')) {
     case 'flow':
       return `${what} steers the order of the blocks, which this check does not follow.`;
+    case 'flow-size':
+      return `${what} steers the order of the blocks, which is followed in programs of at most ${figure(data, 'most')} MB.`;
+    case 'undecided':
+      return `${what} is not known before the run, and not every way the program may take from here was walked.`;
     case 'depends':
       return `${what || 'This block'} depends on ${text(data, 'of')}, which is not known before the run.`;
     case 'system-parameter':
@@ -48,9 +52,12 @@ function describe(data: Parameters<typeof text>[0]): string {
 function advise(reason: string): string {
   if (reason === 'no-reference')
     return 'Enter the stored reference point in the machine description, then check again.';
-  if (reason === 'flow') return 'Post the program without jumps, or have a person prove this part.';
+  if (reason === 'flow' || reason === 'flow-size')
+    return 'Post the program without jumps, or have a person prove this part.';
   if (reason === 'depends')
     return 'If it is a parameter, state its starting value in the controller description; else write the figure into the program, or have a person prove this part.';
+  if (reason === 'undecided')
+    return 'State the starting value in the controller description, or have a person prove this part.';
   if (reason === 'call') return 'Post the program in one piece, or have a person prove this part.';
   if (reason === 'other-axis')
     return 'Post for a machine without that axis, or have a person prove this part.';

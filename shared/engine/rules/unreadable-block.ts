@@ -90,6 +90,20 @@ function describe(data: Parameters<typeof text>[0]): string {
       return `“${what}” names no loop: DO and END are followed by its number.`;
     case 'goto-target':
       return 'GOTO names no line to go to.';
+    case 'flow-unpaired':
+      return `“${what}” belongs to no ${text(data, 'other')} of its label above it.`;
+    case 'flow-open':
+      return `“${what}” begins what no ${text(data, 'other')} of its label ends.`;
+    case 'flow-label':
+      return text(data, 'other') === ''
+        ? `“${what}” has a label that would have to be worked out, and only a call may.`
+        : `The label of “${what}” already belongs to another ${text(data, 'other')}.`;
+    case 'flow-crossing':
+      return `“${what}” crosses the loop ${text(data, 'other')}.`;
+    case 'flow-depth':
+      return `“${what}” is no loop: only 1, 2 and 3 are.`;
+    case 'into-loop':
+      return `The jump to ${what} leads into a loop that has not been begun.`;
     case 'too-large':
       return `${what} is larger than any controller counts.`;
     case 'semicolon':

@@ -17,8 +17,8 @@ export function eventsOf(
   const trace = startTrace(testSetup(change), undefined, {
     observers: [only(['problem', ...kinds], observer(add, told))],
   });
-  trace.push(new TextEncoder().encode(program));
-  trace.endOfText();
+  do trace.push(new TextEncoder().encode(program));
+  while (trace.endOfText() === 'read-again');
   return told;
 }
 

@@ -29,8 +29,8 @@ runCommand((words) => {
     },
     { blockDelete: values['block-delete'] === undefined ? undefined : 'on' },
   );
-  readProgram(program, (bytes) => trace.push(bytes));
-  trace.endOfText();
+  do readProgram(program, (bytes) => trace.push(bytes));
+  while (trace.endOfText() === 'read-again');
   flush();
   return 0;
 });
