@@ -12,7 +12,7 @@ M30
 O1
 G0 Z5
 M98 P1 L3
-^^^^^^^^^ subprogram-loop: The subprogram O1 calls itself, and is still doing so 10 calls deep.
+^^^^^^ subprogram-loop: The subprogram O1 calls itself, and is still doing so 10 calls deep.
 M99
 `,
   );
