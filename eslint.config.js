@@ -73,7 +73,7 @@ export default tseslint.config(
     ignores: [
       'shared/engine/**/*.spec.ts',
       'shared/engine/{testing,bench,cli}/**',
-      'shared/engine/rules/write-reference.ts',
+      'shared/engine/{rules,language}/write-reference.ts',
     ],
     rules: {
       ...restrict(NODE_BUILTINS, {
