@@ -151,6 +151,13 @@ const G_CODES: readonly Code[] = [
     modelled: 'exactly',
     source: NIST('3.5.14'),
   },
+  {
+    code: 'G65',
+    meaning: 'macro call with arguments',
+    modelled: 'exactly',
+    source: TRADE,
+    example: 'G65 P100 A1\nM30\nO100\nG0 X#1\nM99',
+  },
   { code: 'G67', meaning: 'modal macro call off', modelled: 'no effect', source: TRADE },
   { code: 'G69', meaning: 'rotation off', modelled: 'no effect', source: TRADE },
   { code: 'G69.1', meaning: 'rotation off', modelled: 'no effect', source: TRADE },
@@ -279,6 +286,20 @@ const M_CODES: readonly Code[] = [
   { code: 'M48', meaning: 'overrides on', modelled: 'no effect', source: NIST('3.6.5') },
   { code: 'M49', meaning: 'overrides off', modelled: 'no effect', source: NIST('3.6.5') },
   { code: 'M60', meaning: 'stop, pallet shuttle', modelled: 'exactly', source: NIST('3.6.1') },
+  {
+    code: 'M97',
+    meaning: 'call of a line number of the same program',
+    modelled: 'exactly',
+    source: TRADE,
+    example: 'M97 P10\nM30\nN10 G0 X1\nM99',
+  },
+  {
+    code: 'M98',
+    meaning: 'subprogram call',
+    modelled: 'exactly',
+    source: TRADE,
+    example: 'M98 P100\nM30\nO100\nG0 X1\nM99',
+  },
   { code: 'M99', meaning: 'return, or end of a main program', modelled: 'exactly', source: TRADE },
 ];
 

@@ -19,7 +19,7 @@ function outcome({ key, example, setup }: Switch, value: string | number | boole
   const bytes = new TextEncoder().encode(program);
   do trace.push(bytes);
   while (trace.endOfText() === 'read-again');
-  const { setup: _setup, ...report } = runProgram(program, change);
+  const report = { ...runProgram(program, change), setup: undefined };
   return { moved, report };
 }
 
