@@ -18,6 +18,7 @@ const PROGRAMS = [
   '%\nO1\n/T1 M6\nG20 G91\nG2 X1 Y1 I.5 J.5 F9\nG18 G3 X2 Z1 R4\nG83 X1 Z-1 R.1 Q.2\nG80\nG53 G0 Z0\nG28 Z0\nM99',
   '#1=5\no100 sub\nG0 X#1\no100 endsub\no100 call [3]\nIF [#1 EQ 5] GOTO 10\nN10 G65 P100 A1\nM98 P1 L3\nM30\n',
   'G21 G90\n#<a>=[SIN[30]*2] #2=[#<a>**2-1/3]\nM66 P1 L3 Q5\nG38.3 Z-5 F100\nG91 G0 X[#5399*#2] Y#5063\nG90 G53 G0 Z#501\n#5221=[#5221+#500] G54\nG2 X#1005 I[ATAN[1]/[#2]]\n#3006=1 #3000=#0\nM30\n',
+  'G21 G17 G54\nT2 M6\nG41 D2\nG1 X9 Y1 F900\nX0\nG3 X-9 Y9 R9 P2\nY30 Z-1\nX0.000000000001\nG2 I4 J-4\nG0 X50\nD5\nG91 X-5\nX5\nG93 Y9 F2\nG40 X1\nG42.1 D-7\nX60\nG40\nG28 A5\nM30\n',
 ].map((text) => new TextEncoder().encode(text));
 
 const SETUPS: readonly Setup[] = [

@@ -124,6 +124,8 @@ function wander(seed: number): string {
           'G43 H4',
           'G80',
           'G40',
+          'G41 D4',
+          'G42 D5',
           'G20',
           'G21',
           'G93',

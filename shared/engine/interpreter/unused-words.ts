@@ -1,6 +1,7 @@
 import { LETTER, letterBits, letterName } from '../blocks/block';
 import { GROUP } from '../blocks/code-groups';
 import { takesTurns } from './arcs';
+import { keepDiameterNumber, keepsDiameterNumber } from './compensation/switch-compensation';
 import { tellProblem, type Run } from './run';
 import { isCycle } from './cycles';
 
@@ -31,6 +32,10 @@ export function checkUse(run: Run): void {
   // An unknown or declared code takes its words with it; the code itself is told if it is unknown.
   if (block.others.length > 0) unused &= FOREIGN & ~letterBits('EUVW');
   unused &= ~usedBy(run, code);
+  if ((unused & (1 << LETTER.D)) !== 0 && keepsDiameterNumber(run)) {
+    unused &= ~(1 << LETTER.D);
+    keepDiameterNumber(run);
+  }
   if (shop.setup.machine.travel.a !== undefined) unused &= ~(1 << LETTER.A);
   if (unused === 0) return;
   for (let letter = 0; letter < 26; letter++) {

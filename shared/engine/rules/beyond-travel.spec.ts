@@ -146,3 +146,33 @@ M30
 `,
   );
 });
+
+test('judges the path of the cutter under compensation, not the programmed one', () => {
+  // The sheet's right-hand edge is 2 mm inside the travel, and the cutter of 3 mm radius runs outside it.
+  checkRule(
+    beyondTravel,
+    {},
+    `
+${START.replace('T1', 'T2').replace('H1', 'H2')}
+G0 X1240 Y-30
+G42 D2 G1 X1240 Y0 F3000
+X1268
+Y500
+^^^^ beyond-travel: Drives X 1 mm (0.0394 in) past the right-hand travel (1300 mm).
+G40 G0 X1200
+M30
+`,
+  );
+  checkRule(
+    beyondTravel,
+    {},
+    `
+${START.replace('T1', 'T2').replace('H1', 'H2')}
+G0 X1240 Y-30
+G1 X1240 Y0 F3000
+X1268
+Y500
+M30
+`,
+  );
+});

@@ -119,7 +119,7 @@ G41 D99
 G1 X50
 G40 X90
 G41
-^^^ out-of-range-word: G41 takes D52, the diameter offset of the tool in the spindle, which the table does not hold.
+^^^ out-of-range-word: G41 takes D52, a diameter offset which the table does not hold.
 G1 X150
 G40 X200
 M30

@@ -85,7 +85,7 @@ export const outOfRangeWord = defineRule({
         };
       case 'own-diameter':
         return {
-          message: `${written} takes D${figure(data, 'value')}, the diameter offset of the tool in the spindle, which the table does not hold.`,
+          message: `${written} takes D${figure(data, 'value')}, a diameter offset which the table does not hold.`,
           advice: 'Enter the offset, or write the D number that is meant.',
         };
       case 'fewer':

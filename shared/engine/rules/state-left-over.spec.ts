@@ -51,3 +51,21 @@ M30
 `,
   );
 });
+
+test('flags compensation that is on while the tool is changed', () => {
+  checkRule(
+    stateLeftOver,
+    {},
+    `
+G21 G90 G54 G17
+T2 M6
+G41 D2 G1 X50 F1000
+X90
+T4 M6
+^^^^^ state-left-over: G41 is still on as the tool is changed (set in line 3): the radius of the old cutter would hold for the new one.
+G40 X200
+T2 M6
+M30
+`,
+  );
+});

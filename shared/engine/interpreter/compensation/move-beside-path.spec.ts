@@ -247,3 +247,26 @@ describe('what is refused or told while it is on', () => {
     expect(told.at(-1)).toBe('5 feed X96.8 Y-2.4 Z0');
   });
 });
+
+describe('D in a macro dialect holds on (common practice, no source)', () => {
+  const macro = { controller: { language: 'custom-macro' } };
+  test('a lone D is for the next G41', () => {
+    expect(ways('G0 X20 Y0\nD1\nG41\nG1 X0\nX-20', macro).at(-1)).toBe('6 feed X-20 Y-5 Z0');
+    expect(ways('D1')[0]).toContain('not-modelled no-use');
+  });
+  test('with G41 on the cutter goes over to it with the next move', () => {
+    // From (−20, −3) to (−60, 0) at a radius of 5, then straight on.
+    const told = ways('G0 X20 Y0\nG41 D2\nG1 X0\nX-20\nD1\nX-60\nX-80', macro);
+    expect(told.at(-1)).toBe('8 feed X-80 Y-5 Z0');
+  });
+  test('D0 and back is a new entry', () => {
+    const told = ways('G0 X20 Y0\nG41 D0\nG1 X0\nD2\nX-20\nX-40', macro);
+    expect(told.at(-1)).toBe('7 feed X-40 Y-3 Z0');
+  });
+});
+
+describe('G10 L1 in the program', () => {
+  test('R sets the radius of the cutter', () => {
+    expect(ways('G10 L1 P2 R4\nG0 X20 Y0\nG41 D2\nG1 X0\nX-20').at(-1)).toBe('6 feed X-20 Y-4 Z0');
+  });
+});

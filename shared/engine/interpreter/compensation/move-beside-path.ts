@@ -80,8 +80,10 @@ function readProgrammed(run: Run): Target {
   return to;
 }
 
+/** Sums that should meet differ by less, mm; a shorter move has no direction to speak of. */
+const SAME_POINT = 1e-9;
 const isAt = (one: { x: number; y: number }, other: { x: number; y: number }): boolean =>
-  one.x === other.x && one.y === other.y;
+  Math.abs(one.x - other.x) + Math.abs(one.y - other.y) <= SAME_POINT;
 
 /** No XY move: Z and A go along, the cutter stays at its side. */
 function goAlong(run: Run, { kind, to, feed }: Move): void {

@@ -3,6 +3,8 @@ export interface Offset {
   /** 1: the cutter runs left of the path, −1: right of it; 0: off. A negative diameter has swapped it. */
   side: 1 | -1 | 0;
   radius: number;
+  /** The D number that the next G41 or G42 without one takes; null for that of the held tool. */
+  number: number | null;
   /** Where the program stands; the cutter is off to its side. */
   x: number;
   y: number;
@@ -22,6 +24,7 @@ export interface Offset {
 export const noOffset = (): Offset => ({
   side: 0,
   radius: 0.5,
+  number: null,
   x: 0.5,
   y: 0.5,
   toolX: 0.5,

@@ -8,6 +8,8 @@ import { refuse, tellProblem, type Run } from '../run';
 import { wholeNumber } from '../whole-number';
 
 const OFF = 400;
+/** Less is no radius, mm: the side of the cutter would be lost in rounding. */
+const NO_RADIUS = 1e-6;
 /** G41.1 and G42.1: the D word is the diameter itself. */
 const BY_DIAMETER: readonly number[] = [411, 421];
 
@@ -31,7 +33,7 @@ function switchOff(run: Run): void {
 }
 
 function switchOn(run: Run, code: number): void {
-  const { block, machine, offset } = run;
+  const { block, machine, offset, dialect } = run;
   const name = codeName('G', code);
   if (machine.planeIndex !== 0)
     return refuse(
@@ -41,32 +43,55 @@ function switchOn(run: Run, code: number): void {
       { reason: 'plane', plane: machine.plane },
     );
   const side = code < 420 ? 'left' : 'right';
-  const number = readNumber(run, code);
+  const isDiameter = BY_DIAMETER.includes(code);
+  if (isDiameter && !block.has(LETTER.D))
+    return refuse(run, 'missing-word', { code: name }, { code: name, letter: 'D' });
+  const number = isDiameter ? null : readNumber(run);
   if (run.refused) return;
-  const diameter = BY_DIAMETER.includes(code)
+  const diameter = isDiameter
     ? block.value(LETTER.D) * machine.unit
     : findDiameter(run, name, number);
-  const sign = (side === 'left' ? 1 : -1) * (diameter < 0 ? -1 : 1);
-  const radius = Math.abs(diameter) / 2;
-  const isRestated =
-    side === machine.compensation && (!machine.isOffset || offset.radius === radius);
-  if (isRestated && !run.dialect.isStrict) return tellSide(run, side, number);
-  // Macro-style controllers take a new side as a new entry; the published language refuses it.
-  const isRefused = run.dialect.isStrict || run.controller.language === 'rs274ngc';
-  if (isRefused && refuseWhileCompensating(run, name)) return;
+  const isRestated = side === machine.compensation && offset.radius === Math.abs(diameter) / 2;
+  if (dialect.isStrict || !isRestated) {
+    // Macro-style controllers take a new side as a new entry; the published language refuses it.
+    const isRefused = dialect.isStrict || run.controller.language === 'rs274ngc';
+    if (isRefused && refuseWhileCompensating(run, name)) return;
+    begin(run, side, diameter);
+  }
+  tellSide(run, side, number);
+}
+
+/** From now on the cutter is to run half the diameter to a side, and has yet to go there. */
+function begin(run: Run, side: 'left' | 'right', diameter: number): void {
+  const { machine, offset } = run;
   if (!machine.isOffset) {
     offset.x = machine.x;
     offset.y = machine.y;
   }
   offset.toolX = machine.x;
   offset.toolY = machine.y;
-  offset.side = sign === 1 ? 1 : -1;
-  offset.radius = radius;
+  offset.side = (side === 'left') === diameter >= 0 ? 1 : -1;
+  offset.radius = Math.abs(diameter) / 2;
   offset.isEntering = true;
   offset.isLeaving = false;
   offset.room = NaN;
-  machine.isOffset = radius > 0;
-  tellSide(run, side, number);
+  machine.isOffset = offset.radius > NO_RADIUS;
+}
+
+/**
+ * Whether a D word without G41 or G42 means anything: a macro-style controller keeps it for the next of them, and
+ * with one of them on goes over to it (common practice, no source).
+ */
+export const keepsDiameterNumber = ({ controller, dialect }: Run): boolean =>
+  controller.language === 'custom-macro' && !dialect.isStrict;
+
+export function keepDiameterNumber(run: Run): void {
+  const { machine } = run;
+  const number = readNumber(run);
+  const side = machine.compensation;
+  if (side === 'off' || run.refused) return;
+  begin(run, side, findDiameter(run, 'D', number));
+  run.tell.compensation({ side, number, place: machine.place({ letters: 'D' }) });
 }
 
 function tellSide(run: Run, side: MachineState['compensation'], number: number | null): void {
@@ -77,18 +102,13 @@ function tellSide(run: Run, side: MachineState['compensation'], number: number |
   run.tell.compensation({ side, number, place: machine.place({ letters: 'D', code }) });
 }
 
-/** The number of the diameter offset, null where none is written or D is no number; refuses what is none. */
-function readNumber(run: Run, code: number): number | null {
-  const { block } = run;
-  if (BY_DIAMETER.includes(code)) {
-    const name = codeName('G', code);
-    if (!block.has(LETTER.D))
-      refuse(run, 'missing-word', { code: name }, { code: name, letter: 'D' });
-    return null;
-  }
-  if (!block.has(LETTER.D)) return null;
+/** The number of the diameter offset, null where none is stated; refuses a D that is no number. */
+function readNumber(run: Run): number | null {
+  const { block, offset } = run;
+  if (!block.has(LETTER.D)) return offset.number;
   const number = wholeNumber(block.value(LETTER.D));
   if (!(number >= 0)) refuseNegative(run, LETTER.D);
+  else if (keepsDiameterNumber(run)) offset.number = number;
   return number;
 }
 
@@ -106,11 +126,11 @@ function findDiameter(run: Run, name: string, number: number | null): number {
   const diameter = run.diameters.get(number ?? own ?? NaN);
   if (diameter !== undefined) return diameter;
   const facts = { letter: 'D', value: number ?? own ?? 0 };
-  if (number !== null) {
+  if (number !== null && block.has(LETTER.D)) {
     const what = block.written(block.wordOf[LETTER.D]!);
     const tell = run.dialect.isStrict ? refuse : tellProblem;
     tell(run, 'out-of-range-word', { letters: 'D' }, { ...facts, what, needs: 'in-table' });
-  } else if (own !== undefined)
+  } else if (number !== null || own !== undefined)
     tellProblem(
       run,
       'out-of-range-word',
