@@ -17,6 +17,17 @@ export interface Move {
   readonly feed: number;
 }
 
+/** Sums that should meet differ by less, mm; a shorter move has no direction to speak of. */
+const SAME_POINT = 1e-9;
+export const isSamePoint = (one: Vector, other: Vector): boolean =>
+  Math.abs(one.x - other.x) + Math.abs(one.y - other.y) <= SAME_POINT;
+
+/** No XY move: Z and A go along, the cutter stays at its side. */
+export function goAlong(run: Run, { kind, to, feed }: Move): void {
+  const { x, y } = run.machine;
+  moveStraight(run, kind, 'program', { ...to, x, y }, feed);
+}
+
 /** One straight or round part of the way of the cutter's centre. */
 export interface Part {
   readonly to: Target;

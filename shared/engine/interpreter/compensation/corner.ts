@@ -48,7 +48,7 @@ export const directionOf = (normal: Vector, side: number): Vector => ({
   y: -side * normal.x,
 });
 
-/** The side normal at a point of an arc: away from its centre (`out` 1) or towards it (−1). */
+/** The side normal at a point of an arc: away from its centre (`out` 1) or towards it (−1). At the centre itself, +X. */
 export function radial(
   centre: { readonly u: number; readonly v: number },
   point: Vector,
@@ -57,5 +57,6 @@ export function radial(
   const x = point.x - centre.u;
   const y = point.y - centre.v;
   const length = Math.sqrt(x * x + y * y);
+  if (length === 0) return { x: out, y: 0 };
   return { x: (out * x) / length, y: (out * y) / length };
 }

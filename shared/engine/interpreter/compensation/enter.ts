@@ -3,7 +3,7 @@ import { LIMIT_SLACK } from '../../geometry/tolerance';
 import { arcTolerance, arcTurn, moveArc, placeCentre } from '../arcs';
 import type { Circle } from '../kept';
 import type { Facts, Run } from '../run';
-import { beside, standBeside, tellFault, travel, type Move } from './beside';
+import { beside, goAlong, isSamePoint, standBeside, tellFault, travel, type Move } from './beside';
 import { findEntryCircle, straightEntryNormal } from './entry';
 import { radial, sideNormal } from './corner';
 
@@ -16,6 +16,12 @@ export function enter(run: Run, move: Move): void {
   const { radius, side } = offset;
   const length = Math.hypot(to.x - machine.x, to.y - machine.y);
   if (move.turning !== 0) return enterByArc(run, move, move.turning);
+  if (isSamePoint(machine, to)) {
+    // The cutter is there already, as after a change of side: the next move enters.
+    offset.x = to.x;
+    offset.y = to.y;
+    return goAlong(run, move);
+  }
   if (length <= radius + LIMIT_SLACK) {
     // No tangent leads there; the cutter comes to the side of the move as if it had been on before.
     const aside = sideNormal(to.x - machine.x, to.y - machine.y, side);

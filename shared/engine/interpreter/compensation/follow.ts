@@ -2,7 +2,16 @@ import { LIMIT_SLACK } from '../../geometry/tolerance';
 import { arcTurn, findCircle } from '../arcs';
 import type { Target } from '../kept';
 import type { Run } from '../run';
-import { beside, standBeside, tellFault, travel, type Move, type Part } from './beside';
+import {
+  beside,
+  goAlong,
+  isSamePoint,
+  standBeside,
+  tellFault,
+  travel,
+  type Move,
+  type Part,
+} from './beside';
 import {
   cornerOf,
   cornerReach,
@@ -33,7 +42,8 @@ export function followArc(run: Run, move: Move, turning: 1 | -1): void {
   const { to } = move;
   const isInside = turning === offset.side;
   const programmed = findCircle(run, turning, offset.x, offset.y, to.x, to.y);
-  if (!programmed) return followLine(run, move);
+  // An arc that cannot be drawn is told; the walk goes on from its end.
+  if (!programmed) return isSamePoint(to, offset) ? goAlong(run, move) : followLine(run, move);
   const out = isInside ? -1 : 1;
   const turn = arcTurn(run, turning, programmed, offset.x, offset.y, to.x, to.y);
   const start = radial(programmed, offset, out);

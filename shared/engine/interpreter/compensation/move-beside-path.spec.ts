@@ -270,3 +270,18 @@ describe('G10 L1 in the program', () => {
     expect(ways('G10 L1 P2 R4\nG0 X20 Y0\nG41 D2\nG1 X0\nX-20').at(-1)).toBe('6 feed X-20 Y-4 Z0');
   });
 });
+
+// Found by mutated programs: each left the walk without a position.
+describe('what has no direction', () => {
+  const macro = { controller: { language: 'custom-macro' } };
+  test.each([
+    ['an arc without a centre that ends where it starts', `${ENTRY}\nX-20\nG2 X-20\nG1 Y20`, {}],
+    ['an arc that ends at its centre', `${ENTRY}\nX-20\nG2 X-30 I-10\nG1 Y20`, {}],
+    ['a move to where the cutter is already', `${ENTRY}\nX-20\nG42 D1\nY-3\nX-60`, macro],
+    ['a move of next to nothing', `${ENTRY}\nX-20\nX-20.000000000001\nY20`, {}],
+  ])('%s', (_story, program, change) => {
+    const told = ways(program, change);
+    expect(told.join()).not.toMatch(/NaN|Infinity/);
+    expect(told.at(-1)).toMatch(/^\d feed X/);
+  });
+});

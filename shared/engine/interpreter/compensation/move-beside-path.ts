@@ -4,7 +4,7 @@ import type { Target } from '../kept';
 import { LIMIT_SLACK } from '../../geometry/tolerance';
 import { moveStraight, readTarget } from '../motions';
 import { tellProblem, type Run } from '../run';
-import type { Move } from './beside';
+import { goAlong, isSamePoint, type Move } from './beside';
 import { enter } from './enter';
 import { followArc, followLine } from './follow';
 
@@ -34,7 +34,8 @@ export function moveBesidePath(run: Run, code: number): boolean {
   if (machine.x !== offset.toolX || machine.y !== offset.toolY) startFromHere(run);
   const move = readMove(run, code);
   const { to, turning } = move;
-  if ((run.block.seen & IN_PLANE) === 0 || (turning === 0 && isAt(to, offset))) goAlong(run, move);
+  if ((run.block.seen & IN_PLANE) === 0 || (turning === 0 && isSamePoint(to, offset)))
+    goAlong(run, move);
   else if (offset.isEntering) enter(run, move);
   else if (turning === 0) followLine(run, move);
   else followArc(run, move, turning);
@@ -78,17 +79,6 @@ function readProgrammed(run: Run): Target {
   machine.x = x;
   machine.y = y;
   return to;
-}
-
-/** Sums that should meet differ by less, mm; a shorter move has no direction to speak of. */
-const SAME_POINT = 1e-9;
-const isAt = (one: { x: number; y: number }, other: { x: number; y: number }): boolean =>
-  Math.abs(one.x - other.x) + Math.abs(one.y - other.y) <= SAME_POINT;
-
-/** No XY move: Z and A go along, the cutter stays at its side. */
-function goAlong(run: Run, { kind, to, feed }: Move): void {
-  const { x, y } = run.machine;
-  moveStraight(run, kind, 'program', { ...to, x, y }, feed);
 }
 
 /**
