@@ -20,14 +20,15 @@ export const SWITCHES: readonly Switch[] = [
     key: 'language',
     values: ['rs274ngc', 'custom-macro'],
     changes:
-      'The published language with named parameters and o-words, or macro variables with IF, GOTO, WHILE and G65. In the latter an unset variable takes its word with it, FIX drops the fraction, AND and OR work bit by bit, cycles are a group of their own beside G0 to G3, and G80 gives back the motion code from before them.',
+      'The published language with named parameters and o-words, or macro variables with IF, GOTO, WHILE and G65. In the latter an unset variable takes its word with it, FIX drops the fraction, AND and OR work bit by bit, cycles are a group of their own beside G0 to G3, and G80 gives back the motion code from before them. There D is kept from block to block, the offset lines of an outside corner may run on to where they cross, and P beside an arc counts no turns.',
     source: 'NISTIR 6556; common practice for macros, no source',
     example: `${HEAD}#100=FIX[0-2.8]\nG0 X[#100+10]`,
   },
   {
     key: 'arcTolerance',
     values: [0.0127, 0.5],
-    changes: 'How far the two radii of an arc may differ, mm.',
+    changes:
+      'How far the two radii of an arc may differ, and a radius word fall short of half its chord, mm.',
     source: 'NISTIR 6556 3.5.3.2 for the rule; the limit is the controller’s own',
     example: `${HEAD}G0 X0 Y0\nG2 X10.2 Y0 I5 J0`,
   },
