@@ -26,7 +26,7 @@ export const COUNTS = {
   /** Mutated statements that must neither crash nor hang their reader. */
   statements: of(6_000, 400_000),
   /** Mutated programs that must neither crash nor hang. */
-  fuzz: of(400, 50_000),
+  fuzz: of(400, 200_000),
   /** Random byte strings pushed as they are. */
   garbage: of(300, 20_000),
 } as const;

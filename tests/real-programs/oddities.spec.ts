@@ -24,7 +24,7 @@ function ends(program: string, change: object = {}): string[] {
   const bytes = new TextEncoder().encode(program);
   do trace.push(bytes);
   while (trace.endOfText() === 'read-again');
-  return moved.map(({ line, to }) => `${line} ${to.x},${to.y},${to.z}`);
+  return moved.map(({ line, to }) => `${line} ${to?.x},${to?.y},${to?.z}`);
 }
 
 test('the plain program that all others are a change of is clear', () => {
