@@ -247,6 +247,28 @@ M5
 G53 G0 Z0
 M30
 `;
+/** A bore: down a helix on its wall, out to the middle, and once more with a short line behind a lead-out arc. */
+const BORE = `
+G21 G90 G17 G40
+T2 M6
+S18000 M3
+G54 G0 X50 Y50
+G43 Z20 H2
+Z1
+G41 D2 G1 X58 F2500
+G3 I-8 J0 Z-1
+G3 I-8 J0 Z-2
+G3 I-8 J0
+G40 G1 X50
+Z2
+G41 D2 G1 X58
+G3 I-8 J0 Z-2
+G3 X50 Y58 I-8 J0
+G3 X46 Y54 I0 J-4
+G1 G40 X46 Y53
+G0 Z20
+M30
+`;
 const POCKET = `
 G21 G90 G17 G40
 T2 M6
@@ -289,6 +311,8 @@ test.each([
   ['custom-macro', OUTSIDE],
   ['rs274ngc', POCKET],
   ['custom-macro', POCKET],
+  ['rs274ngc', BORE],
+  ['custom-macro', BORE],
   ['rs274ngc', CURVE],
   ['custom-macro', CURVE],
 ])('is silent on ordinary contours, %s', (language, program) => {

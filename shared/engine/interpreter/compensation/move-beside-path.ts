@@ -102,7 +102,9 @@ function comeBack(run: Run, code: number): boolean {
   const to = readProgrammed(run);
   const length = Math.hypot(to.x - offset.x, to.y - offset.y);
   const { radius } = offset;
-  if (length <= radius + LIMIT_SLACK && code === 10 && offset.isLow)
+  // Behind a lead-out arc the cutter is clear of the work, and a short line to end on is ordinary.
+  const isBehindLine = !Number.isNaN(offset.room);
+  if (length <= radius + LIMIT_SLACK && code === 10 && offset.isLow && isBehindLine)
     tellLeave(run, { reason: 'leave-short', length, radius });
   moveStraight(run, code === 0 ? 'rapid' : 'feed', 'program', to, code === 0 ? NaN : feedOf(run));
   return true;
