@@ -69,6 +69,21 @@ test('the second walk of a program with blocks that may be skipped reads all of 
   expect(JSON.stringify(await stores.checks.report(shop.shopId, id))).toBe(JSON.stringify(alone));
 });
 
+test('a program that calls, loops and leaves a branch open comes out as the engine alone gives it', async () => {
+  const { stores } = house.database;
+  const text =
+    'G21 G90 G17 G54\no100 sub\nG0 X[#1*10]\no100 endsub\no100 call [3]\nM66 P1 L0\n' +
+    'o10 if [#5399 EQ 1]\nG0 X5000\no10 else\nG0 X10\no10 endif\nM30\n';
+  const { revisionId } = await addProgram(stores, shop, 'branch.nc', text);
+  const { id } = await ask(stores, shop, revisionId);
+  await whenDone(stores, shop.shopId, id);
+  const details = await stores.checks.details(shop.shopId, id);
+  const alone = checkProgram(text, setupSchema.parse(details?.setup), 'branch.nc');
+  const assumed = alone.findings.find(({ rule }) => rule === 'beyond-travel')?.assumed;
+  expect(assumed).toEqual([{ line: 7, condition: '[#5399 EQ 1] holds' }]);
+  expect(JSON.stringify(await stores.checks.report(shop.shopId, id))).toBe(JSON.stringify(alone));
+});
+
 test('whoever listens is told how far a check is, forward only, and that it is done', async () => {
   const { stores } = house.database;
   const { revisionId } = await addProgram(stores, shop, 'long.nc', engraving(150_000));

@@ -42,9 +42,12 @@ function printFinding(finding: Finding, isUnattended: boolean): string[] {
   const span = count > 1 ? ` (${count} blocks to line ${endLine}, worst at line ${worstLine})` : '';
   const folded = finding.folded ? ` (and ${finding.folded} more of this rule)` : '';
   const inside = within ? ` [${within.text} line ${within.line}]` : '';
+  const assuming = (finding.assumed ?? [])
+    .map((each) => ` [if ${each.condition} at line ${each.within?.line ?? each.line}]`)
+    .join('');
   const skipping = finding.blockDelete ? ' [with block delete on]' : '';
   return [
-    `${MARKS[severity]}  ${where}  ${finding.message}${span}${folded}${inside}${skipping}  (${finding.rule})`,
+    `${MARKS[severity]}  ${where}  ${finding.message}${span}${folded}${inside}${skipping}${assuming}  (${finding.rule})`,
     `      ${finding.advice}`,
     '',
   ];

@@ -3,6 +3,7 @@ import { createMachinesAndTools } from './20261201-0910-create-machines-and-tool
 import { createPrograms } from './20261201-0920-create-programs';
 import { createChecks } from './20261201-0930-create-checks';
 import { createAuditTrail } from './20261201-0940-create-audit-trail';
+import { addFindingAssumptions } from './20261201-1200-add-finding-assumptions';
 import type { Migration } from './migration';
 
 /** Every migration, oldest first. A list, not a folder read at run time, so that it survives bundling. */
@@ -12,4 +13,5 @@ export const MIGRATIONS: readonly Migration[] = [
   createPrograms,
   createChecks,
   createAuditTrail,
+  addFindingAssumptions,
 ];

@@ -83,6 +83,7 @@ export class FindingRow extends Model<
   declare columnTo: number | null;
   declare within: FindingDocument['within'] | null;
   declare blockDelete: 'on' | null;
+  declare assumed: FindingDocument['assumed'] | null;
   declare tool: number | null;
   declare folded: number | null;
   declare hold: 'look' | 'judge' | null;
@@ -173,6 +174,7 @@ const findingColumns = {
   columnTo: column.maybeWhole,
   within: column.maybeDocument,
   blockDelete: column.maybeWords,
+  assumed: column.maybeDocument,
   tool: column.maybeWhole,
   folded: column.maybeWhole,
   hold: column.maybeWords,

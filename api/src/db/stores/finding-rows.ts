@@ -15,6 +15,7 @@ export const FINDING_COLUMNS = [
   'column_to',
   'within',
   'block_delete',
+  'assumed',
   'tool',
   'folded',
   'hold',
@@ -25,7 +26,7 @@ export const FINDING_COLUMNS = [
 
 /** One finding as a line of COPY's text format. */
 export function asCopyLine(checkId: string, ordinal: number, finding: FindingDocument): string {
-  const { columns, within, data } = finding;
+  const { columns, within, assumed, data } = finding;
   const values = [
     checkId,
     ordinal,
@@ -40,6 +41,7 @@ export function asCopyLine(checkId: string, ordinal: number, finding: FindingDoc
     columns?.[1],
     within && JSON.stringify(within),
     finding.blockDelete,
+    assumed && JSON.stringify(assumed),
     finding.tool,
     finding.folded,
     finding.hold,
@@ -75,6 +77,7 @@ export interface FindingColumns {
   readonly column_to: number | null;
   readonly within: FindingDocument['within'] | null;
   readonly block_delete: 'on' | null;
+  readonly assumed: FindingDocument['assumed'] | null;
   readonly tool: number | null;
   readonly folded: number | null;
   readonly hold: 'look' | 'judge' | null;
@@ -97,6 +100,7 @@ export function asFinding(row: FindingColumns): StoredFinding {
     ...(from === null || to === null ? {} : { columns: [from, to] }),
     ...(row.within === null ? {} : { within: row.within }),
     ...(row.block_delete === null ? {} : { blockDelete: row.block_delete }),
+    ...(row.assumed === null ? {} : { assumed: row.assumed }),
     ...(row.tool === null ? {} : { tool: row.tool }),
     ...(row.folded === null ? {} : { folded: row.folded }),
     ...(row.hold === null ? {} : { hold: row.hold }),
