@@ -99,9 +99,9 @@ function openGathered(shop: Shop, options: CheckOptions, cuts: CutMemory) {
   const first = reading.walk;
   const walkOthers = (which: 'run' | 'skipped') => {
     const made = reading.walkOthers((assumed) =>
-      gathering.openOtherWalk(which, () => assumed().map(assumption)),
+      gathering.openOtherWalk(which, () => assumptions(assumed())),
     );
-    gathering.assume(which, made.map(assumption));
+    gathering.assume(which, assumptions(made));
   };
   return {
     reading,
@@ -123,7 +123,17 @@ function openGathered(shop: Shop, options: CheckOptions, cuts: CutMemory) {
   };
 }
 
-/** What a walk took for granted, as a report says it. */
+/** What a walk took for granted, as a report says it: each condition with its outcome once. */
+function assumptions(made: readonly Decision[]): readonly Assumption[] {
+  const seen = new Map<string, Assumption>();
+  for (const each of made.map(assumption)) {
+    const { line, within, condition } = each;
+    const key = `${line} ${within?.text} ${within?.line} ${condition}`;
+    if (!seen.has(key)) seen.set(key, each);
+  }
+  return [...seen.values()];
+}
+
 function assumption({ place, condition, holds }: Decision): Assumption {
   const { line, within } = place;
   const words = `${condition} ${holds ? 'holds' : 'does not hold'}`;

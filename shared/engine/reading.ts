@@ -85,6 +85,7 @@ export class Reading {
     this.movesAtBounds ||= walk.movesAtBounds;
     const queue = decisions.others();
     const walks = [walk];
+    const notWalked = [...decisions.beyond];
     let blocks = walk.follower?.blocksRun ?? 0;
     while (queue.length > 0 && walks.length < MOST_WALKS && blocks < MOST_BLOCKS) {
       const own = new Decisions(queue.shift()!.given);
@@ -98,8 +99,9 @@ export class Reading {
       this.movesAtBounds ||= other.movesAtBounds;
       blocks += other.follower!.blocksRun;
       queue.push(...own.others());
+      notWalked.push(...own.beyond);
     }
-    tellNotWalked(walk, queue);
+    tellNotWalked(walks, [...queue.map(({ parts }) => parts), ...notWalked]);
     tellIfNeverLeft(walks);
     return decisions.made;
   }
@@ -115,16 +117,15 @@ export class Reading {
   }
 }
 
-/** Each condition once, however many walks would part there. */
-function tellNotWalked(walk: Walk, queue: readonly { readonly parts: Decision }[]): void {
+/** Each condition once, however many walks would part there; to all walks, because it hangs on none of them. */
+function tellNotWalked(walks: readonly Walk[], notWalked: readonly Decision[]): void {
   const told = new Set<string>();
-  for (const { parts } of queue) {
-    const { place, condition } = parts;
+  for (const { place, condition } of notWalked) {
     const key = `${place.line} ${place.within?.text} ${place.within?.line} ${condition}`;
     if (told.has(key)) continue;
     told.add(key);
     const facts = { what: condition, reason: 'undecided', most: MOST_WALKS };
-    walk.tellLater('not-modelled', place, facts);
+    for (const walk of walks) walk.tellLater('not-modelled', place, facts);
   }
 }
 
@@ -132,5 +133,5 @@ function tellNotWalked(walk: Walk, queue: readonly { readonly parts: Decision }[
 function tellIfNeverLeft(walks: readonly Walk[]): void {
   if (walks.some(({ follower }) => !follower?.waitsAt)) return;
   const { place, facts } = walks[0]!.follower!.waitsAt!;
-  walks[0]!.tellLater('never-ends', place, facts);
+  for (const walk of walks) walk.tellLater('never-ends', place, facts);
 }

@@ -129,9 +129,9 @@ function mixedLines(): (line: number) => string {
 const FLOW_HEAD = [
   'o100 sub',
   'G1 X[#1+SIN[#2]] Y[#2*0.5] F3000',
-  '#<depth>=[#<depth>+0.001]',
+  '#<_depth>=[#<_depth>+0.001]',
   'o100 endsub',
-  '#<depth>=0',
+  '#5=0 #<_depth>=0',
   'G21 G90 G17 G94',
   'T4 M6',
   'G54 G0 X0 Y0',

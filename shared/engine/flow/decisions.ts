@@ -26,6 +26,8 @@ export class Decisions {
   readonly made: Decision[] = [];
   /** How often an undecided condition has been met. */
   asked = 0;
+  /** What was met when no further question was kept, and was taken not to hold. */
+  readonly beyond: Decision[] = [];
   private readonly outcomes = new Map<string, boolean>();
 
   constructor(private readonly given: readonly boolean[] = []) {}
@@ -35,6 +37,11 @@ export class Decisions {
     this.asked++;
     const known = this.outcomes.get(about);
     if (known !== undefined) return known;
+    if (this.made.length >= MOST_DECISIONS) {
+      this.outcomes.set(about, false);
+      if (this.beyond.length < MOST_DECISIONS) this.beyond.push({ ...describe(), holds: false });
+      return false;
+    }
     const holds = this.given[this.made.length] ?? true;
     this.outcomes.set(about, holds);
     this.made.push({ ...describe(), holds });
@@ -44,10 +51,6 @@ export class Decisions {
   /** Whether the question has been put before. */
   knows(about: string): boolean {
     return this.outcomes.has(about);
-  }
-
-  get isFull(): boolean {
-    return this.made.length >= MOST_DECISIONS;
   }
 
   /** The outcomes that would make other walks of this one, each up to where it parts. */

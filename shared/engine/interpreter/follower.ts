@@ -89,8 +89,7 @@ export class Follower {
   private takeLine(program: KeptProgram, line: number): void {
     if (!this.toldShapes.has(program)) this.tellShapes(program);
     this.readLine(program, line);
-    if (program === this.main)
-      this.visited[line >> 3] = this.visited[line >> 3]! | (1 << (line & 7));
+    if (program === this.main) this.visit(line);
     const overlong = program.text.overlongLength(line);
     if (overlong > 0) this.taker.tellOverlong(overlong);
     else this.taker.takeLine();
@@ -130,7 +129,7 @@ export class Follower {
     for (let line = this.frame.line; line <= text.lines; line++) {
       this.readLine(this.main, line);
       const isBlock = words.count > 0 || words.faults.length > 0 || words.isStatement;
-      if (isBlock) return (this.visited[line >> 3]! & (1 << (line & 7))) === 0;
+      if (isBlock) return !this.hasVisited(line);
     }
     return false;
   }
@@ -142,7 +141,9 @@ export class Follower {
 
   /** A program's own label behind which another program begins; gives whether it ends the subprogram. */
   takeProgramLabel(): boolean {
-    if (this.frames.length === 1 || this.line === this.frame.start) return false;
+    const { start, program } = this.frame;
+    if (this.frames.length === 1 || this.line === start || this.line <= program.firstBlock)
+      return false;
     this.endWithoutReturn();
     return true;
   }
@@ -153,6 +154,9 @@ export class Follower {
     if (this.frames.length > DEEPEST_CALL) return this.refuseCall(callee, words);
     const isOwn = this.frame.program === this.main;
     const { program, start, key, times, locals } = callee;
+    // The line of a sub is passed over by its calls, and is no text that never runs.
+    if (program === this.main && program.shapes.links.get(start - 1)?.kind === 'sub')
+      this.visit(start - 1);
     const calledAt = isOwn ? this.line : this.frame.calledAt;
     this.frames.push(openFrame(program, start, { key, repeats: times - 1, locals, calledAt }));
     this.run.isCalled = true;
@@ -188,7 +192,24 @@ export class Follower {
     const program = this.library.find(key);
     if (!program) return undefined;
     const sub = program.findSub(key);
-    return { program, start: sub === undefined ? 1 : sub + 1 };
+    const start = sub === undefined ? (program.findProgram(key) ?? 1) : sub + 1;
+    return { program, start };
+  }
+
+  /**
+   * Whether a subroutine of the program checked is called before the walk has come by its first line. Such a
+   * controller does not know it yet (facts sheet 12.2.1).
+   */
+  isBehind({ program, start }: Pick<Callee, 'program' | 'start'>): boolean {
+    return program === this.main && this.frame.program === this.main && !this.hasVisited(start - 1);
+  }
+
+  private hasVisited(line: number): boolean {
+    return (this.visited[line >> 3]! & (1 << (line & 7))) !== 0;
+  }
+
+  private visit(line: number): void {
+    this.visited[line >> 3] = this.visited[line >> 3]! | (1 << (line & 7));
   }
 
   /** A jump; loops that it leads out of are left. Tells where it cannot lead. */

@@ -179,6 +179,8 @@ export function callKey(
     const what = key.startsWith('<') ? `o${key}` : `O${key}`;
     return tellProblem(run, 'subprogram-missing', words, { reason: 'call', what });
   }
+  if (locals.kind === 'subroutine' && follower.isBehind(found))
+    tellProblem(run, 'subprogram-missing', words, { reason: 'behind', what: `o${key}` });
   follower.call({ ...found, key, times, locals }, words);
 }
 
@@ -226,11 +228,6 @@ function decide(run: Run, follower: Follower, value: Value, range: Range, world:
   const { decisions, frame, line } = follower;
   const about = `${frame.program.text.name}:${line}:${least}:${greatest}:${of}:${world}`;
   if (world !== '' && decisions.knows(about)) {
-    decisions.asked++;
-    return false;
-  }
-  if (decisions.isFull && !decisions.knows(about)) {
-    tellDepends(run, range, of);
     decisions.asked++;
     return false;
   }

@@ -362,9 +362,13 @@ export class Walk implements LineReader, LineTaker {
 
   private finishRareBlock(bounded?: ReadonlyMap<number, Bounds>): void {
     const { words, run, block } = this;
-    const call = block.others.length > 0 && this.canFollow ? findCall(run) : undefined;
-    if (call && !this.follower) return this.pause();
-    if (call) return this.takeCall(call, bounded);
+    const call = block.others.length > 0 ? findCall(run) : undefined;
+    if (call && this.canFollow) {
+      if (this.follower) this.takeCall(call, bounded);
+      else this.pause();
+      return;
+    }
+    if (call) this.passCall(call);
     if (block.others.length > 0) this.resolveOthers();
     if (words.faults.length > 0) this.tellFaults();
     if (words.comments.length > 0) this.tellComments();
@@ -372,6 +376,14 @@ export class Walk implements LineReader, LineTaker {
       forgetUnknownWords(run);
       run.tell.block();
     } else this.finishBlock();
+  }
+
+  /** A call in a text that is too long to be followed. */
+  private passCall(call: OtherCode): void {
+    const { run } = this;
+    this.tellNotFollowed(codeName(call.letter, call.tenths));
+    run.callsMade = true;
+    takeCallOut(run, call);
   }
 
   /** A block that calls: what else stands in it is carried out first. */
