@@ -1,5 +1,6 @@
 import type { Decision } from './flow/decisions';
 import type { Observer } from './interpreter/events';
+import { exerciseQuietLines } from './interpreter/quiet/exercise';
 import { Reading } from './reading';
 import { openReport } from './report/open-report';
 import type { Assumption, Report } from './report/report';
@@ -49,6 +50,7 @@ export interface ProgramName {
 
 export function startCheck(setup: Setup, options: CheckOptions = {}): Check {
   const shop = openShop(setup);
+  exerciseQuietLines(shop);
   const digest = options.digests === false ? undefined : openSha256();
   const cuts = { isKept: false, isWanted: false, want: () => void (cuts.isWanted = true) };
   let gathered = openGathered(shop, options, cuts);

@@ -142,6 +142,14 @@ function wander(seed: number): string {
           'F900',
           'G1',
           'G0 X1 ;end',
+          '(pocket 12)',
+          'G1 X5 (flip the part)\nM0',
+          '(MSG, take it off)\nM1',
+          'N20 ;',
+          'X5 (one) (two)',
+          'X5 (one (two)',
+          'X5 (one',
+          ';ø',
         );
       case 14:
         return `G81 X${x()} Y${y()} Z-3 R2 F300\nG80`;

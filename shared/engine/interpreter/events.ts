@@ -288,6 +288,11 @@ export interface Observer {
   stretch?(stretch: Stretch, state: MachineState): void;
   problem?(event: ProblemEvent, state: MachineState): void;
   comment?(event: CommentEvent, state: MachineState): void;
+  /**
+   * Whether `comment` takes nothing from a comment of this text that is no message, whatever the state; if
+   * absent, it may from any.
+   */
+  saysNothing?(text: string): boolean;
   toolSelected?(event: ToolSelectedEvent, state: MachineState): void;
   /** Before the change is carried out: state is as the change block found it. */
   toolChanging?(event: ToolChangedEvent, state: MachineState): void;

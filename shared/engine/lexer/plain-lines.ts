@@ -15,11 +15,16 @@ const enum Kind {
   number,
   blank,
   lineEnd,
+  openComment,
+  semicolon,
 }
 
 const KIND_OF = Uint8Array.from({ length: 256 }, (_, byte) => {
-  const at = 'XYZIJFGN \t\n\r'.indexOf(String.fromCharCode(byte).toUpperCase());
-  return at < 0 ? Kind.other : at < 8 ? at + 1 : at < 10 ? Kind.blank : Kind.lineEnd;
+  const at = 'XYZIJFGN \t\n\r(;'.indexOf(String.fromCharCode(byte).toUpperCase());
+  if (at < 0) return Kind.other;
+  if (at < 8) return at + 1;
+  if (at < 10) return Kind.blank;
+  return at < 12 ? Kind.lineEnd : at === 12 ? Kind.openComment : Kind.semicolon;
 });
 
 /** Letters that a plain line has: the bit whose place is their kind. */
@@ -32,6 +37,7 @@ export const enum Seen {
   feed = 64,
   code = 128,
   number = 256,
+  comment = 512,
   axes = 14,
   centre = 48,
 }
@@ -52,6 +58,8 @@ const enum Most {
   lines = 256,
   /** So many digits always fit 32 bits; a line with a longer number is not plain. */
   digits = 9,
+  /** Characters of a comment; a longer one is rare, and read elsewhere. */
+  comment = 120,
 }
 
 const enum Byte {
@@ -59,15 +67,18 @@ const enum Byte {
   lineFeed = 10,
   return = 13,
   space = 32,
+  open = 40,
+  close = 41,
   plus = 43,
   minus = 45,
   point = 46,
   zero = 48,
+  tilde = 126,
 }
 
 /**
  * Lines read ahead, cut into parallel arrays: those of nothing but N, one G word with a whole number, and
- * X, Y, Z, I, J and F at most once each. It is what the lexer and the sorting of words would make of them,
+ * X, Y, Z, I, J and F at most once each, with at most one comment of plain ASCII. It is what the lexer and the sorting of words would make of them,
  * for the nine lines in ten of a long program that are no more than this.
  */
 export class PlainLines {
@@ -84,6 +95,9 @@ export class PlainLines {
   readonly codeTo = new Int32Array(Most.lines);
   readonly feedFrom = new Int32Array(Most.lines);
   readonly feedTo = new Int32Array(Most.lines);
+  /** The bytes of the comment, without its marks. */
+  readonly commentFrom = new Int32Array(Most.lines);
+  readonly commentTo = new Int32Array(Most.lines);
 
   /** Reads on from `at`; every line up to `end` ends with a line end. */
   read(bytes: Uint8Array, at: number, end: number): void {
@@ -101,12 +115,22 @@ export class PlainLines {
         const kind = kinds[byte]!;
         if (kind > Kind.number) {
           if (kind === Kind.lineEnd) break;
-          byte = bytes[++at]!;
+          at++;
+          if (kind !== Kind.blank) {
+            if ((letters & Seen.comment) !== 0) break plainLines;
+            letters |= Seen.comment;
+            this.commentFrom[line] = at;
+            at = endOfComment(bytes, at, kind === Kind.openComment);
+            if (at < 0) break plainLines;
+            this.commentTo[line] = at;
+            if (kind === Kind.openComment) at++;
+          }
+          byte = bytes[at]!;
           continue;
         }
         // Another letter, the same one twice, or a line number that is not in front.
         if (kind === Kind.other || (letters & (1 << kind)) !== 0) break plainLines;
-        if (kind === Kind.number && letters !== 0) break plainLines;
+        if (kind === Kind.number && (letters & ~Seen.comment) !== 0) break plainLines;
         letters |= 1 << kind;
         const from = at;
         byte = bytes[++at]!;
@@ -156,6 +180,8 @@ export class PlainLines {
             this.codeTo[line] = at - start;
           }
         }
+        // Nearly always one blank, and then the next word.
+        if (byte === Byte.space) byte = bytes[++at]!;
       }
       this.ends[line] = at;
       seen[line] = letters;
@@ -165,4 +191,17 @@ export class PlainLines {
     }
     this.count = line;
   }
+}
+
+/** Where a comment's text ends; -1 where it holds anything that has to be looked at more closely. */
+function endOfComment(bytes: Uint8Array, from: number, isBracketed: boolean): number {
+  for (let at = from; at - from <= Most.comment; at++) {
+    const byte = bytes[at]!;
+    if (isBracketed) {
+      if (byte === Byte.close) return at;
+      if (byte === Byte.open) return -1;
+    } else if (byte === Byte.lineFeed || byte === Byte.return) return at;
+    if ((byte < Byte.space && byte !== Byte.tab) || byte > Byte.tilde) return -1;
+  }
+  return -1;
 }

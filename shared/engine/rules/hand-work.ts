@@ -25,6 +25,7 @@ export const handWork = defineRule({
     let said = '';
     let saidAt: Place | undefined;
     return {
+      saysNothing: (words) => !ACTION.test(words),
       comment({ text: words, message, place }: CommentEvent) {
         if (!(message ? /\p{L}{2}/u : ACTION).test(words)) return;
         said = words.trim();

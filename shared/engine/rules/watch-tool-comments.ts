@@ -41,6 +41,7 @@ export function watchToolComments(
     }
   };
   return {
+    saysNothing: (text) => readToolComment(text) === undefined,
     comment({ text, place }) {
       if (waiting.length >= MOST_WAITING) return;
       const read = readToolComment(text);

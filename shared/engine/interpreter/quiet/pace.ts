@@ -109,6 +109,7 @@ export class Pace {
     const { state } = this;
     state[Open.length] = length;
     state[Open.slowness] = slowness;
+    state[Open.acceleration] = 1 / slowness;
     state[Open.endX] = x;
     state[Open.endY] = y;
     state[Open.endZ] = z;
@@ -125,7 +126,7 @@ export class Pace {
 /**
  * Places in the state of a pace. The feed motion last followed stays open, because the next one decides how
  * fast it is left: its length (mm; 0 for none), the speeds at which it was entered and runs at most (mm/s),
- * one over its acceleration, and where it points at its end. An array, so that figures stay unboxed between
+ * its acceleration and one over that, and where it points at its end. An array, so that figures stay unboxed between
  * here and the reader of quiet lines.
  */
 export const enum Open {
@@ -136,6 +137,7 @@ export const enum Open {
   /** One over the speed. */
   perSpeed,
   slowness,
+  acceleration,
   endX,
   endY,
   endZ,
@@ -177,19 +179,22 @@ export function handOver(
   const slower = speed < nextSpeed ? speed : nextSpeed;
   const handed = along < 1 ? slower * along : slower;
   const enter = state[Open.enter]!;
-  const slowness = state[Open.slowness]!;
-  const reached = enter * enter * slowness + 2 * length;
-  return handed * handed * slowness <= reached ? handed : Math.sqrt(reached / slowness);
+  const reached = enter * enter + 2 * state[Open.acceleration]! * length;
+  return handed * handed <= reached ? handed : Math.sqrt(reached);
 }
 
-/** Seconds of the open motion if it is left at this speed: travelSeconds by one division where it cruises. */
+/** Seconds of the open motion if it is left at this speed: travelSeconds without its divisions. */
 export function openSeconds(state: Float64Array, leave: number): number {
   const length = state[Open.length]!;
   const slowness = state[Open.slowness]!;
   const enter = state[Open.enter]!;
   const most = state[Open.speed]!;
-  const ramps = (most * most - 0.5 * (enter * enter + leave * leave)) * slowness;
+  const squares = 0.5 * (enter * enter + leave * leave);
+  const ramps = (most * most - squares) * slowness;
   if (ramps <= length && leave <= most)
     return (2 * most - enter - leave) * slowness + (length - ramps) * state[Open.perSpeed]!;
-  return travelSeconds(length, 1 / slowness, most, enter, leave);
+  const acceleration = state[Open.acceleration]!;
+  const peak = Math.sqrt(acceleration * length + squares);
+  if (enter <= peak && leave <= peak && leave <= most) return (2 * peak - enter - leave) * slowness;
+  return travelSeconds(length, acceleration, most, enter, leave);
 }

@@ -6,10 +6,51 @@ import type { Run } from '../run';
 import { handOver, Open, openSeconds } from './pace';
 import type { QuietWatch } from './quiet-watch';
 
+const enum Here {
+  /** Where the head stands, machine mm. */
+  x,
+  y,
+  z,
+  /** In force, and of the line at hand, mm/min; and what follows from it: min/mm, mm/s, s/mm. */
+  feed,
+  newFeed,
+  perFeed,
+  speed,
+  perSpeed,
+  /** Reached by straight feed motion. */
+  lowX,
+  highX,
+  lowY,
+  highY,
+  lowZ,
+  highZ,
+  /** The room in which feed motion is quiet. */
+  minX,
+  maxX,
+  minY,
+  maxY,
+  minZ,
+  maxZ,
+  unit,
+  baseX,
+  baseY,
+  baseZ,
+  greatestFeed,
+  minutes,
+  mostMinutes,
+  feedLength,
+  /** One over the accelerations. */
+  slowX,
+  slowY,
+  slowZ,
+  count,
+}
+
 /**
  * Carries out quiet lines: plain ones whose motion no rule is curious about (see Quiet). It does what the
- * interpreter would do with them, with everything that stays the same from block to block in local
- * variables, and leaves the first line that is anything else, or whose motion is not quiet, to it.
+ * interpreter would do with them, and leaves the first line that is anything else, or whose motion is not
+ * quiet, to it. Its steps are short on purpose: the just-in-time compiler took longer over one loop that
+ * did all of it, with everything in local variables, than over a million lines.
  */
 export class QuietLines {
   /** What the last call has read: lines, those of them with words, and which of them was the last written on. */
@@ -20,6 +61,21 @@ export class QuietLines {
   /** The line of those read ahead that comes next. */
   private next = 0;
   private readonly longest: number;
+  /** The figures of the motion at hand. An array, so that they stay unboxed from line to line. */
+  private readonly here = new Float64Array(Here.count);
+  /** Lines behind the ones now read. */
+  private firstLine = 0;
+  private isAbsolute = true;
+  private isBlended = true;
+  private isArcReadable = false;
+  private isFeedQuiet = false;
+  /** Whether the head stands where feed motion is quiet. */
+  private isInFeedRoom = false;
+  /** Motion code in force. */
+  private mode = 0;
+  private motions = 0;
+  private isFollowed = false;
+  private paceState = new Float64Array(0);
 
   constructor(
     private readonly run: Run,
@@ -84,224 +140,302 @@ export class QuietLines {
   }
 
   private carryOut(firstLine: number): void {
-    const { run, watch, plain, longest } = this;
-    const { machine, motion } = run;
-    const { quiet, stretch } = watch;
-    const pace = watch.pace!;
-    const { state: paceState, slownesses } = pace;
-    const { x: slowX, y: slowY, z: slowZ } = slownesses;
-    const { unit, baseX, baseY, baseZ } = machine;
-    const isBlended = machine.path === 'G64';
-    const isArcReadable = quiet.hasArcs && machine.planeIndex === 0 && !machine.isArcCentreAbsolute;
-    const { feedMinutes: mostMinutes } = quiet;
-    const greatestFeed = Math.min(quiet.greatestFeed, pace.slowestFeed * 60);
-    const { minX, minY, minZ, maxX, maxY, maxZ } = quiet.feed;
-    const isFollowed = watch.followers.length > 0;
-    let { x, y, z, feed } = machine;
-    let perFeed = 1 / feed;
-    let speed = feed / 60;
-    let perSpeed = 60 / feed;
-    let isFeedQuiet = 0 < feed && feed <= greatestFeed;
-    let { isAbsolute } = machine;
-    let mode = machine.motionCode;
-    let { motions, feedLength, feedMinutes } = stretch;
-    let lowX = Infinity;
-    let lowY = Infinity;
-    let lowZ = Infinity;
-    let highX = -Infinity;
-    let highY = -Infinity;
-    let highZ = -Infinity;
-    let isInFeedRoom = minX <= x && x <= maxX && minY <= y && y <= maxY && minZ <= z && z <= maxZ;
-    let { lines, blocks, lastWritten } = this;
-    let feedLine = 0;
-    let feedFrom = 0;
-    let feedTo = 0;
-    let distanceLine = 0;
-    let distanceFrom = 0;
-    let distanceTo = 0;
-    let modeLine = 0;
-    let modeFrom = 0;
-    let modeTo = 0;
+    this.enter(firstLine);
+    this.takeLines();
+    this.leave();
+  }
 
-    const { starts, ends, codes, values, codeFrom, codeTo } = plain;
+  /** Takes over how the machine stands, and what is quiet. */
+  private enter(firstLine: number): void {
+    const { run, watch, here } = this;
+    const { machine } = run;
+    const { quiet, pace, stretch } = watch;
+    const { feed: room } = quiet;
+    const { slownesses, slowestFeed } = pace!;
+    this.firstLine = firstLine;
+    this.isAbsolute = machine.isAbsolute;
+    this.isBlended = machine.path === 'G64';
+    this.isArcReadable = quiet.hasArcs && machine.planeIndex === 0 && !machine.isArcCentreAbsolute;
+    this.mode = machine.motionCode;
+    this.motions = 0;
+    here[Here.x] = machine.x;
+    here[Here.y] = machine.y;
+    here[Here.z] = machine.z;
+    here[Here.unit] = machine.unit;
+    here[Here.baseX] = machine.baseX;
+    here[Here.baseY] = machine.baseY;
+    here[Here.baseZ] = machine.baseZ;
+    here[Here.greatestFeed] = Math.min(quiet.greatestFeed, slowestFeed * 60);
+    here[Here.mostMinutes] = quiet.feedMinutes;
+    here[Here.minutes] = stretch.feedMinutes;
+    here[Here.feedLength] = stretch.feedLength;
+    here[Here.slowX] = slownesses.x;
+    here[Here.slowY] = slownesses.y;
+    here[Here.slowZ] = slownesses.z;
+    here[Here.minX] = room.minX;
+    here[Here.minY] = room.minY;
+    here[Here.minZ] = room.minZ;
+    here[Here.maxX] = room.maxX;
+    here[Here.maxY] = room.maxY;
+    here[Here.maxZ] = room.maxZ;
+    here[Here.lowX] = here[Here.lowY] = here[Here.lowZ] = Infinity;
+    here[Here.highX] = here[Here.highY] = here[Here.highZ] = -Infinity;
+    this.isInFeedRoom = this.isFeedRoom(machine.x, machine.y, machine.z);
+    this.isFollowed = watch.followers.length > 0;
+    this.paceState = pace!.state;
+    this.setFeed(machine.feed);
+    here[Here.feed] = machine.feed;
+  }
+
+  /** Hands back how the machine stands, and what was gathered. */
+  private leave(): void {
+    const { run, watch, here, isAbsolute, mode } = this;
+    const { machine } = run;
+    const { stretch } = watch;
+    machine.x = here[Here.x]!;
+    machine.y = here[Here.y]!;
+    machine.z = here[Here.z]!;
+    machine.feed = here[Here.feed]!;
+    machine.motionCode = mode;
+    machine.isAbsolute = isAbsolute;
+    stretch.motions += this.motions;
+    stretch.feedLength = here[Here.feedLength]!;
+    stretch.feedMinutes = here[Here.minutes]!;
+    stretch.widen(
+      here[Here.lowX]!,
+      here[Here.lowY]!,
+      here[Here.lowZ]!,
+      here[Here.highX]!,
+      here[Here.highY]!,
+      here[Here.highZ]!,
+    );
+  }
+
+  /** Carries out the lines that were read ahead, up to the first that is not quiet. */
+  private takeLines(): void {
+    const { plain, longest } = this;
+    const { starts, ends, count } = plain;
     let line = this.next;
-    for (; line < plain.count; line++) {
-      const seen = plain.seen[line]!;
+    for (; line < count; line++) {
+      let seen = plain.seen[line]!;
       if (ends[line]! - starts[line]! > longest) break;
+      if ((seen & Seen.comment) !== 0) {
+        if (!this.isQuietComment(line)) break;
+        seen &= ~Seen.comment;
+      }
       if (seen === 0) {
-        lines++;
-        // Blanks alone are a line that is written on.
-        if (ends[line]! > starts[line]!) lastWritten = lines;
+        this.lines++;
+        // Blanks or a comment alone are a line that is written on.
+        if (ends[line]! > starts[line]!) this.lastWritten = this.lines;
         continue;
       }
-      let code = mode;
-      if ((seen & Seen.code) !== 0) {
-        code = codes[line]! * 10;
-        if (code > 30) {
-          // G90 and G91 alone, as posts write them around an incremental stretch.
-          if ((code !== 900 && code !== 910) || (seen & ~(Seen.code | Seen.number)) !== 0) break;
-          lines++;
-          blocks++;
-          lastWritten = lines;
-          if ((code === 900) !== isAbsolute) {
-            isAbsolute = code === 900;
-            distanceLine = lines;
-            distanceFrom = codeFrom[line]!;
-            distanceTo = codeTo[line]!;
-          }
-          continue;
-        }
+      let code = this.mode;
+      if ((seen & Seen.code) !== 0) code = plain.codes[line]! * 10;
+      if (code > 30) {
+        if (!this.takesDistance(line, code, seen)) break;
+        continue;
       }
-      const at = line * Kept.count;
-      let newFeed = feed;
       if ((seen & Seen.feed) !== 0) {
-        newFeed = values[at + Kept.feed]! * unit;
-        if (!(newFeed > 0)) break;
-        perFeed = 1 / newFeed;
-        speed = newFeed / 60;
-        perSpeed = 60 / newFeed;
-        isFeedQuiet = newFeed <= greatestFeed;
+        const feed = plain.values[line * Kept.count + Kept.feed]! * this.here[Here.unit]!;
+        if (!(feed > 0)) break;
+        this.setFeed(feed);
       }
-      if ((seen & Seen.axes) === 0) {
-        // A feed alone is quiet; a code or a centre without an axis is not.
-        if ((seen & ~(Seen.feed | Seen.number)) !== 0 || (seen & Seen.feed) === 0) break;
-      } else {
-        const toX =
-          (seen & Seen.x) === 0 ? x : values[at + Kept.x]! * unit + (isAbsolute ? baseX : x);
-        const toY =
-          (seen & Seen.y) === 0 ? y : values[at + Kept.y]! * unit + (isAbsolute ? baseY : y);
-        const toZ =
-          (seen & Seen.z) === 0 ? z : values[at + Kept.z]! * unit + (isAbsolute ? baseZ : z);
-        if (code === 10) {
-          if ((seen & Seen.centre) !== 0 || !isInFeedRoom || !isFeedQuiet) break;
-          // Most points lie among those before, which are in the room.
-          if (!(lowX <= toX && toX <= highX && lowY <= toY && toY <= highY)) {
-            if (!(minX <= toX && toX <= maxX && minY <= toY && toY <= maxY)) break;
-          }
-          if (!(minZ <= toZ && toZ <= maxZ)) break;
-          const dx = toX - x;
-          const dy = toY - y;
-          const dz = toZ - z;
-          const length = Math.sqrt(dx * dx + dy * dy + dz * dz);
-          if (length !== 0) {
-            const minutes = feedMinutes + length * perFeed;
-            if (!(minutes < mostMinutes)) break;
-            feedMinutes = minutes;
-            feedLength += length;
-            motions++;
-            // Pace.followLine for a feed that no axis limits, in place: a call would box every figure.
-            const part = 1 / length;
-            const alongX = dx * part;
-            const alongY = dy * part;
-            const alongZ = dz * part;
-            const handed = isBlended ? handOver(paceState, alongX, alongY, alongZ, speed) : 0;
-            if (paceState[Open.length] !== 0)
-              paceState[Open.seconds]! += openSeconds(paceState, handed);
-            paceState[Open.length] = length;
-            paceState[Open.enter] = handed < speed ? handed : speed;
-            paceState[Open.speed] = speed;
-            paceState[Open.perSpeed] = perSpeed;
-            paceState[Open.slowness] = Math.max(
-              Math.abs(alongX) * slowX,
-              Math.abs(alongY) * slowY,
-              Math.abs(alongZ) * slowZ,
-            );
-            paceState[Open.endX] = alongX;
-            paceState[Open.endY] = alongY;
-            paceState[Open.endZ] = alongZ;
-            if (toX < lowX) lowX = toX;
-            if (toX > highX) highX = toX;
-            if (toY < lowY) lowY = toY;
-            if (toY > highY) highY = toY;
-            if (toZ < lowZ) lowZ = toZ;
-            if (toZ > highZ) highZ = toZ;
-            if (isFollowed) {
-              motion.fromX = x;
-              motion.fromY = y;
-              motion.fromZ = z;
-              motion.toX = toX;
-              motion.toY = toY;
-              motion.toZ = toZ;
-              motion.feed = newFeed;
-              setStraight(motion, 'feed');
-              this.tellFollowers(firstLine + lines + 1);
-            }
-          }
-        } else {
-          // Rapids and arcs go by the motion itself, because a call would box every figure handed to it.
-          motion.fromX = x;
-          motion.fromY = y;
-          motion.fromZ = z;
-          motion.toX = toX;
-          motion.toY = toY;
-          motion.toZ = toZ;
-          if (code === 0) {
-            if ((seen & Seen.centre) !== 0 || !this.moveAtRapid()) break;
-            isInFeedRoom =
-              minX <= toX &&
-              toX <= maxX &&
-              minY <= toY &&
-              toY <= maxY &&
-              minZ <= toZ &&
-              toZ <= maxZ;
-          } else {
-            if ((seen & Seen.centre) === 0 || !isArcReadable || !isFeedQuiet) break;
-            motion.centreU = (seen & Seen.i) === 0 ? x : x + values[at + Kept.i]! * unit;
-            motion.centreV = (seen & Seen.j) === 0 ? y : y + values[at + Kept.j]! * unit;
-            motion.feed = newFeed;
-            if (!this.findArc(code === 20 ? -1 : 1)) break;
-            const minutes = feedMinutes + motion.length * perFeed;
-            if (!(minutes < mostMinutes)) break;
-            feedMinutes = minutes;
-            feedLength += motion.length;
-            pace.followArc(motion, isBlended);
-            stretch.take(motion);
-            isInFeedRoom = true;
-          }
-          if (motion.moves) {
-            motions++;
-            if (isFollowed) this.tellFollowers(firstLine + lines + 1);
-          }
-        }
-        x = toX;
-        y = toY;
-        z = toZ;
+      if ((seen & Seen.axes) !== 0) {
+        if (!(code === 10 ? this.feeds(line, seen) : this.bends(line, code, seen))) break;
       }
-      lines++;
-      blocks++;
-      lastWritten = lines;
-      if (newFeed !== feed) {
-        feed = newFeed;
-        feedLine = lines;
-        feedFrom = plain.feedFrom[line]!;
-        feedTo = plain.feedTo[line]!;
-      }
-      if (code !== mode) {
-        mode = code;
-        modeLine = lines;
-        modeFrom = codeFrom[line]!;
-        modeTo = codeTo[line]!;
+      // A feed or a line number alone is quiet; a code or a centre without an axis is not.
+      else if ((seen & ~(Seen.feed | Seen.number)) !== 0) break;
+      this.blocks++;
+      this.lastWritten = ++this.lines;
+      if ((seen & Seen.feed) !== 0) this.keepFeed(line);
+      if (code !== this.mode) {
+        this.mode = code;
+        this.note(SETTING.motionMode, plain.codeFrom[line]!, plain.codeTo[line]!);
       }
     }
     this.next = line;
+  }
 
-    stretch.motions = motions;
-    stretch.feedLength = feedLength;
-    stretch.feedMinutes = feedMinutes;
-    stretch.widen(lowX, lowY, lowZ, highX, highY, highZ);
-    machine.x = x;
-    machine.y = y;
-    machine.z = z;
-    machine.feed = feed;
-    machine.motionCode = mode;
-    machine.isAbsolute = isAbsolute;
-    if (distanceLine > 0)
-      machine.noteSetAt(SETTING.distance, firstLine + distanceLine, distanceFrom, distanceTo);
-    if (feedLine > 0) machine.noteSetAt(SETTING.feed, firstLine + feedLine, feedFrom, feedTo);
-    if (modeLine > 0) machine.noteSetAt(SETTING.motionMode, firstLine + modeLine, modeFrom, modeTo);
-    this.lines = lines;
-    this.blocks = blocks;
-    this.lastWritten = lastWritten;
+  private isQuietComment(line: number): boolean {
+    const { plain, watch } = this;
+    return watch.isQuietComment(plain.bytes, plain.commentFrom[line]!, plain.commentTo[line]!);
+  }
+
+  /** G90 and G91 alone, as posts write them around an incremental stretch. */
+  private takesDistance(line: number, code: number, seen: number): boolean {
+    if ((code !== 900 && code !== 910) || (seen & ~(Seen.code | Seen.number)) !== 0) return false;
+    const { plain } = this;
+    this.blocks++;
+    this.lastWritten = ++this.lines;
+    if ((code === 900) === this.isAbsolute) return true;
+    this.isAbsolute = code === 900;
+    this.note(SETTING.distance, plain.codeFrom[line]!, plain.codeTo[line]!);
+    return true;
+  }
+
+  private setFeed(feed: number): void {
+    const { here } = this;
+    here[Here.newFeed] = feed;
+    here[Here.perFeed] = 1 / feed;
+    here[Here.speed] = feed / 60;
+    here[Here.perSpeed] = 60 / feed;
+    this.isFeedQuiet = 0 < feed && feed <= here[Here.greatestFeed]!;
+  }
+
+  private keepFeed(line: number): void {
+    const { here, plain } = this;
+    if (here[Here.newFeed] === here[Here.feed]) return;
+    here[Here.feed] = here[Here.newFeed]!;
+    this.note(SETTING.feed, plain.feedFrom[line]!, plain.feedTo[line]!);
+  }
+
+  /** Notes which word of the line just counted set a mode. */
+  private note(setting: number, from: number, to: number): void {
+    this.run.machine.noteSetAt(setting, this.firstLine + this.lines, from, to);
+  }
+
+  private isFeedRoom(x: number, y: number, z: number): boolean {
+    const { minX, minY, minZ, maxX, maxY, maxZ } = this.watch.quiet.feed;
+    return minX <= x && x <= maxX && minY <= y && y <= maxY && minZ <= z && z <= maxZ;
+  }
+
+  /** Takes the motion as a straight one at feed; false where it is not quiet. */
+  private feeds(line: number, seen: number): boolean {
+    const { here, isAbsolute } = this;
+    const { values } = this.plain;
+    const at = line * Kept.count;
+    const unit = here[Here.unit]!;
+    const x = here[Here.x]!;
+    const y = here[Here.y]!;
+    const z = here[Here.z]!;
+    let toX = x;
+    let toY = y;
+    let toZ = z;
+    if ((seen & Seen.x) !== 0)
+      toX = values[at + Kept.x]! * unit + (isAbsolute ? here[Here.baseX]! : x);
+    if ((seen & Seen.y) !== 0)
+      toY = values[at + Kept.y]! * unit + (isAbsolute ? here[Here.baseY]! : y);
+    if ((seen & Seen.z) !== 0)
+      toZ = values[at + Kept.z]! * unit + (isAbsolute ? here[Here.baseZ]! : z);
+    if ((seen & Seen.centre) !== 0 || !this.isInFeedRoom || !this.isFeedQuiet) return false;
+    if (!(here[Here.minX]! <= toX && toX <= here[Here.maxX]!)) return false;
+    if (!(here[Here.minY]! <= toY && toY <= here[Here.maxY]!)) return false;
+    if (!(here[Here.minZ]! <= toZ && toZ <= here[Here.maxZ]!)) return false;
+    const dx = toX - x;
+    const dy = toY - y;
+    const dz = toZ - z;
+    const length = Math.sqrt(dx * dx + dy * dy + dz * dz);
+    if (length === 0) return true;
+    const minutes = here[Here.minutes]! + length * here[Here.perFeed]!;
+    if (!(minutes < here[Here.mostMinutes]!)) return false;
+    here[Here.minutes] = minutes;
+    here[Here.feedLength]! += length;
+    this.motions++;
+    if (toX < here[Here.lowX]!) here[Here.lowX] = toX;
+    if (toX > here[Here.highX]!) here[Here.highX] = toX;
+    if (toY < here[Here.lowY]!) here[Here.lowY] = toY;
+    if (toY > here[Here.highY]!) here[Here.highY] = toY;
+    if (toZ < here[Here.lowZ]!) here[Here.lowZ] = toZ;
+    if (toZ > here[Here.highZ]!) here[Here.highZ] = toZ;
+    here[Here.x] = toX;
+    here[Here.y] = toY;
+    here[Here.z] = toZ;
+    // Pace.followLine for a feed that no axis limits, in place: a call would box every figure.
+    const { paceState: state } = this;
+    const speed = here[Here.speed]!;
+    const part = 1 / length;
+    const alongX = dx * part;
+    const alongY = dy * part;
+    const alongZ = dz * part;
+    const handed = this.isBlended ? handOver(state, alongX, alongY, alongZ, speed) : 0;
+    if (state[Open.length] !== 0) state[Open.seconds]! += openSeconds(state, handed);
+    const slowX = Math.abs(alongX) * here[Here.slowX]!;
+    const slowY = Math.abs(alongY) * here[Here.slowY]!;
+    const slowZ = Math.abs(alongZ) * here[Here.slowZ]!;
+    const slower = slowX > slowY ? slowX : slowY;
+    const slowness = slower > slowZ ? slower : slowZ;
+    state[Open.length] = length;
+    state[Open.enter] = handed < speed ? handed : speed;
+    state[Open.speed] = speed;
+    state[Open.perSpeed] = here[Here.perSpeed]!;
+    state[Open.slowness] = slowness;
+    state[Open.acceleration] = 1 / slowness;
+    state[Open.endX] = alongX;
+    state[Open.endY] = alongY;
+    state[Open.endZ] = alongZ;
+    if (this.isFollowed) this.showFeed(x, y, z);
+    return true;
+  }
+
+  /** Tells those who follow quiet motion of the straight one that led here. */
+  private showFeed(fromX: number, fromY: number, fromZ: number): void {
+    const { here } = this;
+    const { motion } = this.run;
+    motion.fromX = fromX;
+    motion.fromY = fromY;
+    motion.fromZ = fromZ;
+    motion.toX = here[Here.x]!;
+    motion.toY = here[Here.y]!;
+    motion.toZ = here[Here.z]!;
+    motion.feed = here[Here.newFeed]!;
+    setStraight(motion, 'feed');
+    this.tellFollowers();
+  }
+
+  /** Works out where the axis words of a line lead, as the ends of a motion. */
+  private aim(line: number, seen: number): void {
+    const { here, isAbsolute } = this;
+    const { motion } = this.run;
+    const { values } = this.plain;
+    const at = line * Kept.count;
+    const unit = here[Here.unit]!;
+    const x = here[Here.x]!;
+    const y = here[Here.y]!;
+    const z = here[Here.z]!;
+    motion.fromX = motion.toX = x;
+    motion.fromY = motion.toY = y;
+    motion.fromZ = motion.toZ = z;
+    if ((seen & Seen.x) !== 0)
+      motion.toX = values[at + Kept.x]! * unit + (isAbsolute ? here[Here.baseX]! : x);
+    if ((seen & Seen.y) !== 0)
+      motion.toY = values[at + Kept.y]! * unit + (isAbsolute ? here[Here.baseY]! : y);
+    if ((seen & Seen.z) !== 0)
+      motion.toZ = values[at + Kept.z]! * unit + (isAbsolute ? here[Here.baseZ]! : z);
+  }
+
+  /** Takes the motion as a rapid or an arc; false where it is not quiet. */
+  private bends(line: number, code: number, seen: number): boolean {
+    const { here, watch } = this;
+    const { motion } = this.run;
+    this.aim(line, seen);
+    if (code === 0) {
+      if ((seen & Seen.centre) !== 0 || !this.moveAtRapid()) return false;
+      this.isInFeedRoom = this.isFeedRoom(motion.toX, motion.toY, motion.toZ);
+    } else {
+      if ((seen & Seen.centre) === 0 || !this.isArcReadable || !this.isFeedQuiet) return false;
+      const { values } = this.plain;
+      const at = line * Kept.count;
+      const unit = here[Here.unit]!;
+      motion.centreU = motion.fromX + ((seen & Seen.i) === 0 ? 0 : values[at + Kept.i]! * unit);
+      motion.centreV = motion.fromY + ((seen & Seen.j) === 0 ? 0 : values[at + Kept.j]! * unit);
+      motion.feed = here[Here.newFeed]!;
+      if (!this.findArc(code === 20 ? -1 : 1)) return false;
+      const minutes = here[Here.minutes]! + motion.length * here[Here.perFeed]!;
+      if (!(minutes < here[Here.mostMinutes]!)) return false;
+      here[Here.minutes] = minutes;
+      here[Here.feedLength]! += motion.length;
+      watch.pace!.followArc(motion, this.isBlended);
+      watch.stretch.take(motion);
+      this.isInFeedRoom = true;
+    }
+    if (motion.moves) {
+      this.motions++;
+      if (this.isFollowed) this.tellFollowers();
+    }
+    here[Here.x] = motion.toX;
+    here[Here.y] = motion.toY;
+    here[Here.z] = motion.toZ;
+    return true;
   }
 
   /** Takes the motion as a rapid; false where it is not quiet. */
@@ -356,9 +490,9 @@ export class QuietLines {
     return true;
   }
 
-  private tellFollowers(line: number): void {
+  private tellFollowers(): void {
     const { machine, motion } = this.run;
-    machine.line = line;
+    machine.line = this.firstLine + this.lines + 1;
     for (const follow of this.watch.followers) follow(motion, machine);
   }
 }

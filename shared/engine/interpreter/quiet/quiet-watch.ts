@@ -5,6 +5,10 @@ import { Stretch } from './stretch';
 
 /** Motions told between two questions, at most: what is quiet also depends on where the head is. */
 const MOST_PATIENCE = 64;
+/** Comments remembered as saying nothing; programs repeat themselves. */
+const MOST_COMMENTS = 500;
+/** A message (NISTIR 6556 3.2.4) is handed on without its mark, so that it is never quiet. */
+const MAY_BE_MESSAGE = /^[ \t]*m/i;
 
 /**
  * Knows what motion is quiet now. The observers are asked anew after every event; after motion that was
@@ -20,6 +24,8 @@ export class QuietWatch {
   readonly followers: readonly NonNullable<Observer['quietMotion']>[];
   private readonly asked: readonly NonNullable<Observer['quiet']>[];
   private readonly gathering: readonly NonNullable<Observer['stretch']>[];
+  private readonly readers: readonly Observer[];
+  private readonly quietComments = new Set<string>();
   private isStale = true;
   private loud = 0;
   private patience = 1;
@@ -32,9 +38,22 @@ export class QuietWatch {
     this.followers = observers.flatMap(({ quietMotion }) => (quietMotion ? [quietMotion] : []));
     this.gathering = observers.flatMap(({ stretch }) => (stretch ? [stretch] : []));
     this.pace = observers.find(({ pace }) => pace !== undefined)?.pace;
+    this.readers = observers.filter(({ comment }) => comment !== undefined);
     this.isPossible =
       this.pace !== undefined &&
       observers.every(({ motion, quiet }) => !motion || quiet !== undefined);
+  }
+
+  /** Whether nobody takes anything from a comment, which is plain ASCII. */
+  isQuietComment(bytes: Uint8Array, from: number, to: number): boolean {
+    if (this.readers.length === 0) return true;
+    const text = String.fromCharCode(...bytes.subarray(from, to));
+    if (this.quietComments.has(text)) return true;
+    if (MAY_BE_MESSAGE.test(text)) return false;
+    for (const { saysNothing } of this.readers) if (!saysNothing?.(text)) return false;
+    if (this.quietComments.size >= MOST_COMMENTS) this.quietComments.clear();
+    this.quietComments.add(text);
+    return true;
   }
 
   /** Something other than motion was told: what was quiet may not be now. */
