@@ -27,6 +27,10 @@ export const COUNTS = {
   statements: of(6_000, 400_000),
   /** Mutated programs that must neither crash nor hang. */
   fuzz: of(400, 200_000),
+  /** Programs that steer, each cut into other pieces. */
+  flowChunks: of(20, 1_000),
+  /** Programs made of nothing but what steers. */
+  flowFuzz: of(300, 40_000),
   /** Random byte strings pushed as they are. */
   garbage: of(300, 20_000),
 } as const;

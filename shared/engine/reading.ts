@@ -87,7 +87,8 @@ export class Reading {
     const walks = [walk];
     const notWalked = [...decisions.beyond];
     let blocks = walk.follower?.blocksRun ?? 0;
-    while (queue.length > 0 && walks.length < MOST_WALKS && blocks < MOST_BLOCKS) {
+    const isExhausted = () => blocks >= MOST_BLOCKS || walks.at(-1)!.follower?.isExhausted === true;
+    while (queue.length > 0 && walks.length < MOST_WALKS && !isExhausted()) {
       const own = new Decisions(queue.shift()!.given);
       const other = new Walk(
         this.shop,

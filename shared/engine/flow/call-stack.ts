@@ -6,8 +6,8 @@ export interface Turning {
   readonly at: number;
   turns: number;
   idleTurns: number;
-  /** What had been set, and how many undecided conditions met, when the last turn began. */
-  version: number;
+  /** What was stored, and how many undecided conditions had been met, when the last turn began. */
+  stored: number;
   asked: number;
   /** Turns still to do, of a repeat. */
   left: number;

@@ -9,7 +9,7 @@ export const LARGEST_KEPT = 64 * 1024 * 1024;
 export const MOST_REPEATED = 2_000_000;
 /** Turns of one loop, or jumps back by one line, before it is taken for one that never ends. */
 export const MOST_TURNS = 100_000;
-/** Turns in which nothing is set that any condition could read: where so many pass, all others will. */
+/** Turns that all begin with the same parameters: where so many pass, all others will. */
 export const MOST_IDLE_TURNS = 1_000;
 /**
  * Calls within calls. Controllers stop at 4 to 10 (facts sheet 12.1.7 and 12.1.8 for the lower ones; ten is

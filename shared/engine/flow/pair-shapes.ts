@@ -88,6 +88,8 @@ class Pairing {
 
   finish(): Shapes {
     this.closeDownTo(0);
+    for (const [line, link] of this.links)
+      if ('loop' in link && link.loop.end === 0) this.links.delete(line);
     this.faults.sort((one, other) => one.line - other.line);
     const { links, loops, subs, faults } = this;
     return { links, loops: loops.filter(({ end }) => end > 0), subs, faults };

@@ -101,6 +101,11 @@ export class Follower {
     return this.main.text.lines + MOST_REPEATED - this.blocksLeft;
   }
 
+  /** Whether the walk was given up because it carried out more blocks than any program has. */
+  get isExhausted(): boolean {
+    return this.blocksLeft < 0;
+  }
+
   get frame(): Frame {
     return this.frames[this.frames.length - 1]!;
   }
@@ -249,12 +254,12 @@ export class Follower {
   }
 
   private countTurn(turning: Turning): void {
-    const { version } = this.run.parameters;
+    const { fingerprint } = this.run.parameters;
     const { asked } = this.decisions;
     turning.turns++;
-    turning.idleTurns = version === turning.version ? turning.idleTurns + 1 : 0;
+    turning.idleTurns = fingerprint === turning.stored ? turning.idleTurns + 1 : 0;
     const isUnknown = asked !== turning.asked;
-    turning.version = version;
+    turning.stored = fingerprint;
     turning.asked = asked;
     // A repeat ends by itself, however many turns it says.
     if (turning.left > 0) return;
@@ -329,7 +334,7 @@ export class Follower {
         { letters: 'P' },
         { what: `N${target}`, reason: 'return' },
       );
-    else this.jump(line, false);
+    else this.jump(line, line < frame.line);
   }
 
   /** As goRound, where the line at hand has been carried out by a walk that then paused. */
@@ -408,7 +413,7 @@ const openTurning = (at: number): Turning => ({
   at,
   turns: 0,
   idleTurns: 0,
-  version: -1,
+  stored: NaN,
   asked: 0,
   left: 0,
 });

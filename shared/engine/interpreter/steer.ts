@@ -244,7 +244,7 @@ function worldOf({ machine, parameters }: Run, { frames }: Follower): string {
   return [
     ...[x, y, z, a, unit, planeIndex, isAbsolute, motionCode, feed, speed, turning, workOffset],
     ...[lengthOffset, compensation, held.known, held.number, selectedTool, coolant.mist],
-    ...[coolant.flood, machine.baseX, machine.baseY, machine.baseZ, parameters.version],
+    ...[coolant.flood, machine.baseX, machine.baseY, machine.baseZ, parameters.fingerprint],
     frames.length,
   ].join(' ');
 }

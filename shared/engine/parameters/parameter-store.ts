@@ -1,7 +1,8 @@
 import type { Failure, ParameterReader } from '../expressions/evaluate';
 import { EVERYTHING } from '../expressions/interval';
 import type { Grammar } from '../expressions/grammar';
-import { isBounds, type Value } from '../expressions/value';
+import type { Value } from '../expressions/value';
+import { Fingerprint } from './fingerprint';
 import { showParameter, type ParameterKey } from './parameter-name';
 
 /** A parameter that is not stored but read off the machine, each time it is asked for. */
@@ -15,6 +16,7 @@ export interface LiveParameter {
 interface Level {
   readonly numbers: Map<number, Value>;
   readonly names: Map<string, Value>;
+  print: number;
 }
 
 /** Facts sheet 4.3. */
@@ -36,11 +38,11 @@ const SUBROUTINE_LOCALS = 30;
  *   will read, and a check that took nought for it would be clear on a guess. The setup can state it.
  */
 export class ParameterStore implements ParameterReader {
-  /** Counts what has been stored that was not there before: while it stands still, so does all that is read. */
-  version = 0;
   private readonly numbers = new Map<number, Value>();
   private readonly globals = new Map<string, Value>();
-  private readonly levels: Level[] = [{ numbers: new Map(), names: new Map() }];
+  private readonly levels: Level[] = [{ numbers: new Map(), names: new Map(), print: 0 }];
+  private readonly prints = new Fingerprint();
+  private commonPrint = 0;
 
   constructor(
     private readonly grammar: Grammar,
@@ -82,12 +84,11 @@ export class ParameterStore implements ParameterReader {
   set(key: ParameterKey, value: Value): Failure | undefined {
     const live = this.live.get(key);
     if (live) {
-      this.version++;
       const refused = live.write ? live.write(value) : 'system';
       return refused && { reason: refused, what: showParameter(key) };
     }
     if (typeof key === 'string') {
-      this.put(this.namesOf(key), key, value);
+      this.put(key, value);
       return undefined;
     }
     if (!this.hasNumber(key)) return outside(key);
@@ -95,26 +96,25 @@ export class ParameterStore implements ParameterReader {
     const firstSystem = this.grammar.isMacro ? FIRST_SYSTEM : HIGHEST_PUBLISHED + 1;
     if (key >= firstSystem && !this.stated.has(key))
       return { reason: 'system', what: showParameter(key) };
-    this.put(this.placeOf(key), key, value);
+    this.put(key, value);
     return undefined;
   }
 
-  private put<Key>(into: Map<Key, Value>, key: Key, value: Value): void {
-    const before = into.get(key);
-    if (before === undefined || !isSame(before, value)) this.version++;
-    into.set(key, value);
+  /** The same whenever the same is stored, here and in all calls that are still to return. */
+  get fingerprint(): number {
+    return (this.commonPrint + this.level.print) | 0;
   }
 
   /** G65: local variables of its own, those not given null (facts sheet 12.1.7). */
   enterMacro(given: ReadonlyMap<number, Value>): void {
-    this.levels.push({ numbers: new Map(given), names: new Map() });
+    this.levels.push({ numbers: new Map(given), names: new Map(), print: 0 });
   }
 
   /** An o-word call: its values become #1, #2 …, all others are still the caller's (12.2.2). */
   enterSubroutine(given: readonly Value[]): void {
     const numbers = new Map(this.level.numbers);
     given.slice(0, SUBROUTINE_LOCALS).forEach((value, index) => numbers.set(index + 1, value));
-    this.levels.push({ numbers, names: new Map() });
+    this.levels.push({ numbers, names: new Map(), print: 0 });
   }
 
   /** The caller's own parameters are as they were. */
@@ -128,9 +128,25 @@ export class ParameterStore implements ParameterReader {
     for (const [number, value] of this.numbers) copy.numbers.set(number, value);
     for (const [name, value] of this.globals) copy.globals.set(name, value);
     copy.levels.length = 0;
-    for (const { numbers, names } of this.levels)
-      copy.levels.push({ numbers: new Map(numbers), names: new Map(names) });
+    for (const { numbers, names, print } of this.levels)
+      copy.levels.push({ numbers: new Map(numbers), names: new Map(names), print });
+    copy.commonPrint = this.commonPrint;
     return copy;
+  }
+
+  private put(key: ParameterKey, value: Value): void {
+    const isLocal = typeof key === 'number' ? key <= this.locals : !isGlobal(key);
+    const before =
+      typeof key === 'number' ? this.placeOf(key).get(key) : this.namesOf(key).get(key);
+    const change = this.prints.of(key, value) - this.prints.of(key, before);
+    if (isLocal) this.level.print = (this.level.print + change) | 0;
+    else this.commonPrint = (this.commonPrint + change) | 0;
+    if (typeof key === 'number') this.placeOf(key).set(key, value);
+    else this.namesOf(key).set(key, value);
+  }
+
+  private get locals(): number {
+    return this.grammar.isMacro ? MACRO_LOCALS : SUBROUTINE_LOCALS;
   }
 
   private get level(): Level {
@@ -138,8 +154,7 @@ export class ParameterStore implements ParameterReader {
   }
 
   private placeOf(number: number): Map<number, Value> {
-    const locals = this.grammar.isMacro ? MACRO_LOCALS : SUBROUTINE_LOCALS;
-    return number <= locals ? this.level.numbers : this.numbers;
+    return number <= this.locals ? this.level.numbers : this.numbers;
   }
 
   private namesOf(name: string): Map<string, Value> {
@@ -158,11 +173,6 @@ export class ParameterStore implements ParameterReader {
 
 /** Facts sheet 12.2.4: names with an underscore in front are the same in every subroutine. */
 const isGlobal = (name: string): boolean => name.startsWith('_');
-
-function isSame(one: Value, other: Value): boolean {
-  if (one === null || other === null || !isBounds(one) || !isBounds(other)) return one === other;
-  return one.least === other.least && one.greatest === other.greatest && one.of === other.of;
-}
 
 const outside = (number: number): Failure => ({
   reason: 'parameter-number',

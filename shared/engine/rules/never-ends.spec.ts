@@ -40,6 +40,39 @@ M2
   );
 });
 
+test('finds a loop whose own counter stands still, whatever turns within it', () => {
+  checkRule(
+    neverEnds,
+    {},
+    `
+#1=0
+o1 while [#1 LT 3]
+^^^^^^^^^^^^^^^^^^ never-ends
+#2=0
+o2 while [#2 LT 3]
+#2=[#2+1]
+o2 endwhile
+o1 endwhile
+M2
+`,
+  );
+});
+
+test('finds a return that leads back in front of its call', () => {
+  checkRule(
+    neverEnds,
+    MACRO,
+    `
+N10 G0 X1
+M98 P5
+^^^^^^ never-ends
+M30
+O5
+M99 P10
+`,
+  );
+});
+
 test('finds a loop that counts for ever', () => {
   checkRule(
     neverEnds,
