@@ -22,7 +22,10 @@ export function eventsOf(
   return told;
 }
 
-export type EventKind = Exclude<keyof Observer, 'pace' | 'quiet' | 'quietMotion' | 'stretch'>;
+export type EventKind = Exclude<
+  keyof Observer,
+  'pace' | 'quiet' | 'quietMotion' | 'stretch' | 'saysNothing'
+>;
 type Add = (text: string, state: MachineState) => void;
 
 function observer(add: Add, told: string[]): Required<Pick<Observer, EventKind>> {
