@@ -87,6 +87,16 @@ describe('a condition that nothing decides before the run', () => {
   });
 });
 
+test('what a report rests on includes what only another outcome uses', () => {
+  const program =
+    'G21 G90 G54\nG53 G0 Z0\nT1 M6\no1 if [#500 EQ 1]\nG4 P1\no1 else\nT3 M6\no1 endif\nM30';
+  const { dependsOn, tools } = runProgram(program);
+  expect(dependsOn.tools).toEqual([1, 3]);
+  expect(dependsOn.pairs).toContainEqual([1, 3]);
+  // Times and uses are those of the walk in which conditions hold.
+  expect(tools.map(({ number }) => number)).toEqual([1]);
+});
+
 describe('block delete in a program whose text is kept', () => {
   test('is read both ways', () => {
     const program = 'G21 G90 G54\n/ GOTO 20\nG0 X5000\nN20 G0 Y10\nM30';

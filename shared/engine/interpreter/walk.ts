@@ -110,8 +110,8 @@ export class Walk implements LineReader, LineTaker {
     this.blocks = kept.program.blocks;
     this.linesRead = kept.program.text.lines;
     this.lastWritten = kept.program.text.lastWritten;
-    if (run.endedBy !== '' && !SILENT_ENDS.includes(run.endedBy) && follower.findTextAfterEnd())
-      tellProblem(run, 'text-after-end', undefined, {});
+    const mayNotRun = run.endedBy !== '' && !SILENT_ENDS.includes(run.endedBy) && !run.callsMade;
+    if (mayNotRun && follower.findTextAfterEnd()) tellProblem(run, 'text-after-end', undefined, {});
     run.machine.within = undefined;
     this.tellEnd();
   }

@@ -86,7 +86,7 @@ export function openReport(shop: Shop, rules: readonly Rule[], cuts: CutMemory):
     openOtherWalk(reading, assumes) {
       const walk = openWalk(shop, rules, cuts);
       others[reading].push({ walk, assumed: assumes });
-      return [...walk.before, coverage, ...walk.after];
+      return [...walk.before, coverage, ...summaries.ofEveryWalk, ...walk.after];
     },
     assume(reading, made) {
       assumed[reading] = made;

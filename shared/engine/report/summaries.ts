@@ -16,6 +16,8 @@ export type Summary = Pick<
 /** Everything a report says beside its findings, gathered over the walk that reads `/` blocks as run. */
 export function gatherSummaries(shop: Shop): {
   readonly observers: readonly Observer[];
+  /** Those of them that gather from every walk: the result rests on all. */
+  readonly ofEveryWalk: readonly Observer[];
   result(): Summary;
 } {
   const extents = watchExtents(shop);
@@ -25,6 +27,7 @@ export function gatherSummaries(shop: Shop): {
   const dependsOn = watchDependsOn(shop);
   return {
     observers: [extents, toolUse, times, windows, dependsOn],
+    ofEveryWalk: [dependsOn],
     result() {
       const taken = times.result();
       const { gauge, work } = extents.result();
