@@ -20,11 +20,17 @@ export class Pace {
   private readonly feedLimits: InverseLimits;
   private readonly rapidLimits: InverseLimits;
   readonly slownesses: InverseLimits;
+  /** Greatest feed (mm/s) and one over the acceleration on arcs, by plane: XY, ZX, YZ. */
+  private readonly planeFeeds: readonly number[];
+  private readonly planeSlownesses: readonly number[];
   private readonly start: MutablePoint = { x: 0.5, y: 0.5, z: 0.5 };
   private readonly end: MutablePoint = { x: 0.5, y: 0.5, z: 0.5 };
 
   constructor(private readonly setup: Setup) {
     const { maxFeed, rapid, acceleration } = setup.machine;
+    const planes = ['xy', 'zx', 'yz'] as const;
+    this.planeFeeds = planes.map((plane) => weakest(plane, maxFeed) / 60);
+    this.planeSlownesses = planes.map((plane) => 1 / weakest(plane, acceleration));
     this.slowestFeed = Math.min(maxFeed.x, maxFeed.y, maxFeed.z) / 60;
     this.feedLimits = inverse(maxFeed, 60);
     this.rapidLimits = inverse(rapid, 60);
@@ -56,16 +62,30 @@ export class Pace {
 
   /** A feed motion on an arc. Every direction of its plane comes up, so the weaker axis decides. */
   followArc(motion: Motion, isBlended: boolean): void {
-    const { machine } = this.setup;
-    const { start, end } = this;
-    arcTangent(motion, 0, start);
-    arcTangent(motion, 1, end);
-    const most = weakest(motion.plane, machine.maxFeed) / 60;
-    const { feed } = motion;
+    const { plane, length, feed } = motion;
+    const at = plane === 'xy' ? 0 : plane === 'zx' ? 1 : 2;
+    const most = this.planeFeeds[at]!;
     const speed = feed > 0 && feed / 60 < most ? feed / 60 : most;
-    this.follow(start.x, start.y, start.z, speed, isBlended);
-    const slowness = 1 / weakest(motion.plane, machine.acceleration);
-    this.setOpen(motion.length, slowness, end.x, end.y, end.z);
+    const slowness = this.planeSlownesses[at]!;
+    if (at !== 0) {
+      const { start, end } = this;
+      arcTangent(motion, 0, start);
+      arcTangent(motion, 1, end);
+      this.follow(start.x, start.y, start.z, speed, isBlended);
+      return this.setOpen(length, slowness, end.x, end.y, end.z);
+    }
+    // Nine arcs in ten lie in the XY plane: both tangents of arcTangent in one go.
+    const { fromX, fromY, toX, toY, centreU, centreV } = motion;
+    const along = (motion.radius * motion.turn) / length;
+    const rise = (motion.toZ - motion.fromZ) / length;
+    const startU = fromX - centreU;
+    const startV = fromY - centreV;
+    const starts = along / Math.sqrt(startU * startU + startV * startV);
+    this.follow(-startV * starts, startU * starts, rise, speed, isBlended);
+    const endU = toX - centreU;
+    const endV = toY - centreV;
+    const ends = along / Math.sqrt(endU * endU + endV * endV);
+    this.setOpen(length, slowness, -endV * ends, endU * ends, rise);
   }
 
   /** A rapid, from standstill to standstill. */
