@@ -19,7 +19,7 @@ const SOURCES = ['shared', 'worker/src/command-line'];
 
 const [name, ...words] = process.argv.slice(2);
 const entry = ENTRIES[name] ?? fail(`Say which: ${Object.keys(ENTRIES).join(', ')}.`);
-const bundle = join(ROOT, 'dist', 'cli', `${name}.js`);
+const bundle = join(ROOT, 'dist', 'cli', `${name}.cjs`);
 if (!isFresh(bundle)) await bundleEntry();
 process.argv = [process.argv[0], bundle, ...words];
 await import(pathToFileURL(bundle).href);
@@ -37,7 +37,10 @@ async function bundleEntry() {
     bundle: true,
     platform: 'node',
     target: 'node20',
-    format: 'esm',
+    // Starts a tenth sooner than a module, and so does a shorter text.
+    format: 'cjs',
+    outExtension: { '.js': '.cjs' },
+    minifyWhitespace: true,
     sourcemap: true,
     // Writes constants where they are used: a constant of another module is looked up every time otherwise.
     minifySyntax: true,

@@ -158,7 +158,7 @@ function takeTurns(file: string, modes: readonly Mode[], rounds = pairs): Map<Mo
 
 /** One mode in a process of its own, by the bundle beside this one. */
 function runProcess(mode: Mode, file: string): Figures {
-  const program = join(dirname(process.argv[1]!), 'bench-run.js');
+  const program = join(dirname(process.argv[1]!), 'bench-run.cjs');
   const output = execFileSync(process.execPath, [program, mode, file, setup], { encoding: 'utf8' });
   return JSON.parse(output) as Figures;
 }

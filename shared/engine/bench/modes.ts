@@ -111,7 +111,7 @@ interface GcodeParser {
   GCodeLineStream: new () => Transform;
 }
 
-const loadParser = () => createRequire(import.meta.url)('gcode-parser') as GcodeParser;
+const loadParser = () => createRequire(process.argv[1]!)('gcode-parser') as GcodeParser;
 
 /** The public parser's streaming path, its results dropped. */
 function parseStream(path: string): Promise<number> {

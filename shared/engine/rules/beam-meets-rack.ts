@@ -1,6 +1,6 @@
+import { boundsOfAll } from '../geometry/prism';
 import type { MachineState } from '../interpreter/events';
-import { pairUp, worstContact, type Meetings, keepApart } from '../shop/meetings';
-import type { Shop } from '../shop/shop';
+import { pairUpWhenNear, worstContact, type Meetings, keepApart } from '../shop/meetings';
 import { bodySolids, parkedSolids, rackSolids } from '../shop/solids';
 import { contactCause, contactData, wordClearing, wordMoving, wordStanding } from './contact-words';
 import { isPlaced, movedWords } from './placing';
@@ -37,12 +37,16 @@ export const beamMeetsRack = defineRule({
   observe: (shop, report) => {
     const moving = bodySolids(shop.setup.machine, true).filter((solid) => solid.rides !== 'head');
     if (moving.length === 0) return {};
+    const rack = rackSolids(shop.setup.rack);
+    const around = boundsOfAll([...rack, ...parkedSolids(shop, null)].map(({ prism }) => prism));
+    const pairWith = (held: number | null): Meetings =>
+      pairUpWhenNear(moving, around, () => [...rack, ...parkedSolids(shop, held)]);
     let held: number | null = null;
-    let meetings = pairWith(shop, held);
+    let meetings = pairWith(held);
     const meetingsWith = (state: MachineState) => {
       if (state.held.number !== held) {
         held = state.held.number;
-        meetings = pairWith(shop, held);
+        meetings = pairWith(held);
       }
       return meetings;
     };
@@ -66,8 +70,3 @@ export const beamMeetsRack = defineRule({
     };
   },
 });
-
-function pairWith(shop: Shop, held: number | null): Meetings {
-  const moving = bodySolids(shop.setup.machine, true).filter((solid) => solid.rides !== 'head');
-  return pairUp(moving, [...rackSolids(shop.setup.rack), ...parkedSolids(shop, held)]);
-}

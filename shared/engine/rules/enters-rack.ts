@@ -1,5 +1,6 @@
+import { boundsOfAll } from '../geometry/prism';
 import type { HeldTool } from '../interpreter/events';
-import { pairUp, worstContact, type Meetings, keepApart } from '../shop/meetings';
+import { pairUp, worstContact, type Meetings, keepApart, pairUpWhenNear } from '../shop/meetings';
 import type { Tool } from '../shop/setup';
 import type { Shop } from '../shop/shop';
 import { bodySolids, parkedSolids, rackSolids, toolSolids } from '../shop/solids';
@@ -66,6 +67,7 @@ export const entersRack = defineRule({
 /** What can meet what, worked out again only when the held tool or the boot changes. */
 function openRackReach(shop: Shop) {
   const rack = rackSolids(shop.setup.rack);
+  const around = boundsOfAll([...rack, ...parkedSolids(shop, null)].map(({ prism }) => prism));
   const longest = longestListed(shop);
   let isBootDown = true;
   let tool: Tool | undefined;
@@ -78,7 +80,8 @@ function openRackReach(shop: Shop) {
       ...bodySolids(shop.setup.machine, isBootDown).filter((solid) => solid.rides === 'head'),
       ...(assumed ? toolSolids(assumed) : []),
     ];
-    meetings = pairUp(moving, [...rack, ...parkedSolids(shop, isKnown ? number : null)]);
+    const held = isKnown ? number : null;
+    meetings = pairUpWhenNear(moving, around, () => [...rack, ...parkedSolids(shop, held)]);
   };
   return {
     isBootDown: () => isBootDown,

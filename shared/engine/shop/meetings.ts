@@ -42,6 +42,25 @@ export function pairUp(
 }
 
 /**
+ * As pairUp, where it is enough to know a box around all that stands as long as nothing comes near it: the
+ * pairs are only worked out when they are looked at, and after most tool changes they never are.
+ */
+export function pairUpWhenNear(
+  moving: readonly MovingSolid[],
+  around: Prism,
+  standing: () => readonly StandingSolid[],
+): Meetings {
+  const regions = moving.map((mover) => regionOfMeeting({ prism: around }, mover));
+  let list: readonly Meeting[] | undefined;
+  return {
+    bounds: boundsOfAll(regions.filter((region) => region !== undefined)),
+    get list() {
+      return (list ??= pairUp(moving, standing()).list);
+    },
+  };
+}
+
+/**
  * The meeting that a path is deepest in, if there is one. `isBox`: the path is only known to lie in
  * the box of its ends. A path that begins in a region and goes straight up leaves it, which is no fault.
  */

@@ -154,7 +154,10 @@ function unknownHolder(pocket: Pocket): Prism {
  * Where the gauge point may not be for these two: as meetingRegion for what rides on the head; a
  * carriage keeps its own height, and a gantry spans all X too. Undefined: they can never meet.
  */
-export function regionOfMeeting(standing: StandingSolid, moving: MovingSolid): Prism | undefined {
+export function regionOfMeeting(
+  standing: Pick<StandingSolid, 'prism'>,
+  moving: MovingSolid,
+): Prism | undefined {
   const region = meetingRegion(standing.prism, moving.prism);
   if (moving.rides === 'head') return region;
   const meetsInHeight =

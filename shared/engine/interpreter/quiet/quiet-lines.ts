@@ -7,10 +7,13 @@ import { handOver, Open, openSeconds } from './pace';
 import type { QuietWatch } from './quiet-watch';
 
 const enum Here {
-  /** Where the head stands, machine mm. */
+  /** Where the head stands, and where the line leads: machine mm. */
   x,
   y,
   z,
+  toX,
+  toY,
+  toZ,
   /** In force, and of the line at hand, mm/min; and what follows from it: min/mm, mm/s, s/mm. */
   feed,
   newFeed,
@@ -35,6 +38,10 @@ const enum Here {
   baseX,
   baseY,
   baseZ,
+  /** Of the arc at hand, machine mm. */
+  centreU,
+  centreV,
+  arcTolerance,
   greatestFeed,
   minutes,
   mostMinutes,
@@ -165,6 +172,7 @@ export class QuietLines {
     here[Here.baseX] = machine.baseX;
     here[Here.baseY] = machine.baseY;
     here[Here.baseZ] = machine.baseZ;
+    here[Here.arcTolerance] = run.controller.arcTolerance + RADIUS_ROUNDING;
     here[Here.greatestFeed] = Math.min(quiet.greatestFeed, slowestFeed * 60);
     here[Here.mostMinutes] = quiet.feedMinutes;
     here[Here.minutes] = stretch.feedMinutes;
@@ -241,7 +249,8 @@ export class QuietLines {
         this.setFeed(feed);
       }
       if ((seen & Seen.axes) !== 0) {
-        if (!(code === 10 ? this.feeds(line, seen) : this.bends(line, code, seen))) break;
+        this.aim(line, seen);
+        if (!this.moves(line, code, seen)) break;
       }
       // A feed or a line number alone is quiet; a code or a centre without an axis is not.
       else if ((seen & ~(Seen.feed | Seen.number)) !== 0) break;
@@ -299,8 +308,8 @@ export class QuietLines {
     return minX <= x && x <= maxX && minY <= y && y <= maxY && minZ <= z && z <= maxZ;
   }
 
-  /** Takes the motion as a straight one at feed; false where it is not quiet. */
-  private feeds(line: number, seen: number): boolean {
+  /** Works out where the axis words of a line lead. */
+  private aim(line: number, seen: number): void {
     const { here, isAbsolute } = this;
     const { values } = this.plain;
     const at = line * Kept.count;
@@ -317,7 +326,37 @@ export class QuietLines {
       toY = values[at + Kept.y]! * unit + (isAbsolute ? here[Here.baseY]! : y);
     if ((seen & Seen.z) !== 0)
       toZ = values[at + Kept.z]! * unit + (isAbsolute ? here[Here.baseZ]! : z);
-    if ((seen & Seen.centre) !== 0 || !this.isInFeedRoom || !this.isFeedQuiet) return false;
+    here[Here.toX] = toX;
+    here[Here.toY] = toY;
+    here[Here.toZ] = toZ;
+  }
+
+  /** Takes the motion of a line; false where it is not quiet. */
+  private moves(line: number, code: number, seen: number): boolean {
+    const hasCentre = (seen & Seen.centre) !== 0;
+    if (code === 10) return !hasCentre && this.feeds();
+    if (code === 0) return !hasCentre && this.rapids();
+    if (!hasCentre || !this.isArcReadable || !this.isFeedQuiet) return false;
+    const { here, plain } = this;
+    const at = line * Kept.count;
+    const unit = here[Here.unit]!;
+    const i = (seen & Seen.i) === 0 ? 0 : plain.values[at + Kept.i]! * unit;
+    const j = (seen & Seen.j) === 0 ? 0 : plain.values[at + Kept.j]! * unit;
+    here[Here.centreU] = here[Here.x]! + i;
+    here[Here.centreV] = here[Here.y]! + j;
+    return this.bends(code === 20 ? -1 : 1);
+  }
+
+  /** Takes the motion as a straight one at feed; false where it is not quiet. */
+  private feeds(): boolean {
+    const { here } = this;
+    if (!this.isInFeedRoom || !this.isFeedQuiet) return false;
+    const x = here[Here.x]!;
+    const y = here[Here.y]!;
+    const z = here[Here.z]!;
+    const toX = here[Here.toX]!;
+    const toY = here[Here.toY]!;
+    const toZ = here[Here.toZ]!;
     if (!(here[Here.minX]! <= toX && toX <= here[Here.maxX]!)) return false;
     if (!(here[Here.minY]! <= toY && toY <= here[Here.maxY]!)) return false;
     if (!(here[Here.minZ]! <= toZ && toZ <= here[Here.maxZ]!)) return false;
@@ -367,74 +406,154 @@ export class QuietLines {
     return true;
   }
 
-  /** Tells those who follow quiet motion of the straight one that led here. */
-  private showFeed(fromX: number, fromY: number, fromZ: number): void {
+  /** Takes the motion as an arc in the XY plane about the centre; false where it is not quiet. */
+  private bends(turning: 1 | -1): boolean {
+    const { here } = this;
+    const x = here[Here.x]!;
+    const y = here[Here.y]!;
+    const z = here[Here.z]!;
+    const toX = here[Here.toX]!;
+    const toY = here[Here.toY]!;
+    const toZ = here[Here.toZ]!;
+    const centreU = here[Here.centreU]!;
+    const centreV = here[Here.centreV]!;
+    const startU = x - centreU;
+    const startV = y - centreV;
+    const endU = toX - centreU;
+    const endV = toY - centreV;
+    const startSquare = startU * startU + startV * startV;
+    const endSquare = endU * endU + endV * endV;
+    const radius = Math.sqrt(startSquare);
+    const difference = Math.abs(radius - Math.sqrt(endSquare));
+    if (radius === 0 || !(difference <= here[Here.arcTolerance]!)) return false;
+    const isFull = Math.abs(toX - x) + Math.abs(toY - y) <= SAME_POINT;
+    const turn = isFull ? turning * TURN : findTurn(turning, startU, startV, endU, endV);
+    const passed = quartersPassed(turn, startU, startV, endU, endV);
+    let minX = x < toX ? x : toX;
+    let maxX = x < toX ? toX : x;
+    let minY = y < toY ? y : toY;
+    let maxY = y < toY ? toY : y;
+    const minZ = z < toZ ? z : toZ;
+    const maxZ = z < toZ ? toZ : z;
+    if ((passed & 1) !== 0 && centreU + radius > maxX) maxX = centreU + radius;
+    if ((passed & 2) !== 0 && centreV + radius > maxY) maxY = centreV + radius;
+    if ((passed & 4) !== 0 && centreU - radius < minX) minX = centreU - radius;
+    if ((passed & 8) !== 0 && centreV - radius < minY) minY = centreV - radius;
+    if (!(here[Here.minX]! <= minX && maxX <= here[Here.maxX]!)) return false;
+    if (!(here[Here.minY]! <= minY && maxY <= here[Here.maxY]!)) return false;
+    if (!(here[Here.minZ]! <= minZ && maxZ <= here[Here.maxZ]!)) return false;
+    const around = Math.abs(radius * turn);
+    const rise = toZ - z;
+    const square = around * around + rise * rise;
+    const length = Math.sqrt(square);
+    const minutes = here[Here.minutes]! + length * here[Here.perFeed]!;
+    if (!(minutes < here[Here.mostMinutes]!)) return false;
+    here[Here.minutes] = minutes;
+    here[Here.feedLength]! += length;
+    this.motions++;
+    this.isInFeedRoom = true;
+    // Where it goes itself: its end, and what it bulges past its start.
+    minX = minX === x && x < toX ? toX : minX;
+    minY = minY === y && y < toY ? toY : minY;
+    maxX = maxX === x && toX < x ? toX : maxX;
+    maxY = maxY === y && toY < y ? toY : maxY;
+    if (minX < here[Here.lowX]!) here[Here.lowX] = minX;
+    if (maxX > here[Here.highX]!) here[Here.highX] = maxX;
+    if (minY < here[Here.lowY]!) here[Here.lowY] = minY;
+    if (maxY > here[Here.highY]!) here[Here.highY] = maxY;
+    if (toZ < here[Here.lowZ]!) here[Here.lowZ] = toZ;
+    if (toZ > here[Here.highZ]!) here[Here.highZ] = toZ;
+    // Pace.followArc for a feed that no axis limits, in place; its tangents are those of arcTangent.
+    const { paceState: state } = this;
+    const speed = here[Here.speed]!;
+    const along = turn < 0 ? -around : around;
+    const atStart = along / Math.sqrt(startSquare * square);
+    const atEnd = along / Math.sqrt(endSquare * square);
+    const up = rise / length;
+    const handed = this.isBlended
+      ? handOver(state, -startV * atStart, startU * atStart, up, speed)
+      : 0;
+    if (state[Open.length] !== 0) state[Open.seconds]! += openSeconds(state, handed);
+    const slowness = here[Here.slowX]! > here[Here.slowY]! ? here[Here.slowX]! : here[Here.slowY]!;
+    state[Open.length] = length;
+    state[Open.enter] = handed < speed ? handed : speed;
+    state[Open.speed] = speed;
+    state[Open.perSpeed] = here[Here.perSpeed]!;
+    state[Open.slowness] = slowness;
+    state[Open.acceleration] = 1 / slowness;
+    state[Open.endX] = -endV * atEnd;
+    state[Open.endY] = endU * atEnd;
+    state[Open.endZ] = up;
+    here[Here.x] = toX;
+    here[Here.y] = toY;
+    here[Here.z] = toZ;
+    if (this.isFollowed) this.showArc(x, y, z, turn, radius);
+    return true;
+  }
+
+  /** Tells those who follow quiet motion of the arc that led here. */
+  private showArc(fromX: number, fromY: number, fromZ: number, turn: number, radius: number): void {
+    const { here } = this;
+    const { motion } = this.run;
+    this.placeMotion(fromX, fromY, fromZ);
+    const { toX, toY } = motion;
+    const centreU = here[Here.centreU]!;
+    const centreV = here[Here.centreV]!;
+    motion.kind = 'arc';
+    motion.by = 'program';
+    motion.plane = 'xy';
+    motion.centreU = centreU;
+    motion.centreV = centreV;
+    motion.radius = radius;
+    motion.turn = turn;
+    motion.moves = true;
+    motion.feed = here[Here.newFeed]!;
+    const passed = quartersPassed(
+      turn,
+      fromX - centreU,
+      fromY - centreV,
+      toX - centreU,
+      toY - centreV,
+    );
+    setExtremes(motion, 0, passed);
+    const along = radius * turn;
+    const rise = motion.toZ - fromZ;
+    motion.length = Math.sqrt(along * along + rise * rise);
+    this.tellFollowers();
+  }
+
+  private placeMotion(fromX: number, fromY: number, fromZ: number): void {
     const { here } = this;
     const { motion } = this.run;
     motion.fromX = fromX;
     motion.fromY = fromY;
     motion.fromZ = fromZ;
-    motion.toX = here[Here.x]!;
-    motion.toY = here[Here.y]!;
-    motion.toZ = here[Here.z]!;
-    motion.feed = here[Here.newFeed]!;
+    motion.toX = here[Here.toX]!;
+    motion.toY = here[Here.toY]!;
+    motion.toZ = here[Here.toZ]!;
+  }
+
+  /** Tells those who follow quiet motion of the straight one that led here. */
+  private showFeed(fromX: number, fromY: number, fromZ: number): void {
+    const { motion } = this.run;
+    this.placeMotion(fromX, fromY, fromZ);
+    motion.feed = this.here[Here.newFeed]!;
     setStraight(motion, 'feed');
     this.tellFollowers();
   }
 
-  /** Works out where the axis words of a line lead, as the ends of a motion. */
-  private aim(line: number, seen: number): void {
-    const { here, isAbsolute } = this;
+  private rapids(): boolean {
+    const { here } = this;
     const { motion } = this.run;
-    const { values } = this.plain;
-    const at = line * Kept.count;
-    const unit = here[Here.unit]!;
-    const x = here[Here.x]!;
-    const y = here[Here.y]!;
-    const z = here[Here.z]!;
-    motion.fromX = motion.toX = x;
-    motion.fromY = motion.toY = y;
-    motion.fromZ = motion.toZ = z;
-    if ((seen & Seen.x) !== 0)
-      motion.toX = values[at + Kept.x]! * unit + (isAbsolute ? here[Here.baseX]! : x);
-    if ((seen & Seen.y) !== 0)
-      motion.toY = values[at + Kept.y]! * unit + (isAbsolute ? here[Here.baseY]! : y);
-    if ((seen & Seen.z) !== 0)
-      motion.toZ = values[at + Kept.z]! * unit + (isAbsolute ? here[Here.baseZ]! : z);
-  }
-
-  /** Takes the motion as a rapid or an arc; false where it is not quiet. */
-  private bends(line: number, code: number, seen: number): boolean {
-    const { here, watch } = this;
-    const { motion } = this.run;
-    this.aim(line, seen);
-    if (code === 0) {
-      if ((seen & Seen.centre) !== 0 || !this.moveAtRapid()) return false;
-      this.isInFeedRoom = this.isFeedRoom(motion.toX, motion.toY, motion.toZ);
-    } else {
-      if ((seen & Seen.centre) === 0 || !this.isArcReadable || !this.isFeedQuiet) return false;
-      const { values } = this.plain;
-      const at = line * Kept.count;
-      const unit = here[Here.unit]!;
-      motion.centreU = motion.fromX + ((seen & Seen.i) === 0 ? 0 : values[at + Kept.i]! * unit);
-      motion.centreV = motion.fromY + ((seen & Seen.j) === 0 ? 0 : values[at + Kept.j]! * unit);
-      motion.feed = here[Here.newFeed]!;
-      if (!this.findArc(code === 20 ? -1 : 1)) return false;
-      const minutes = here[Here.minutes]! + motion.length * here[Here.perFeed]!;
-      if (!(minutes < here[Here.mostMinutes]!)) return false;
-      here[Here.minutes] = minutes;
-      here[Here.feedLength]! += motion.length;
-      watch.pace!.followArc(motion, this.isBlended);
-      watch.stretch.take(motion);
-      this.isInFeedRoom = true;
-    }
-    if (motion.moves) {
-      this.motions++;
-      if (this.isFollowed) this.tellFollowers();
-    }
+    this.placeMotion(here[Here.x]!, here[Here.y]!, here[Here.z]!);
+    if (!this.moveAtRapid()) return false;
     here[Here.x] = motion.toX;
     here[Here.y] = motion.toY;
     here[Here.z] = motion.toZ;
+    this.isInFeedRoom = this.isFeedRoom(motion.toX, motion.toY, motion.toZ);
+    if (!motion.moves) return true;
+    this.motions++;
+    if (this.isFollowed) this.tellFollowers();
     return true;
   }
 
@@ -456,37 +575,6 @@ export class QuietLines {
     if (!motion.moves) return true;
     pace!.rapid(motion);
     stretch.take(motion);
-    return true;
-  }
-
-  /** Works the motion out as an arc in the XY plane about its centre; false where it is not quiet. */
-  private findArc(turning: 1 | -1): boolean {
-    const { motion, controller } = this.run;
-    const { minX, minY, minZ, maxX, maxY, maxZ } = this.watch.quiet.feed;
-    const { fromX, fromY, toX, toY, centreU, centreV } = motion;
-    const startU = fromX - centreU;
-    const startV = fromY - centreV;
-    const endU = toX - centreU;
-    const endV = toY - centreV;
-    const radius = Math.sqrt(startU * startU + startV * startV);
-    const endRadius = Math.sqrt(endU * endU + endV * endV);
-    const difference = Math.abs(radius - endRadius);
-    if (radius === 0 || !(difference <= controller.arcTolerance + RADIUS_ROUNDING)) return false;
-    const isFull = Math.abs(toX - fromX) + Math.abs(toY - fromY) <= SAME_POINT;
-    const turn = isFull ? turning * TURN : findTurn(turning, startU, startV, endU, endV);
-    motion.kind = 'arc';
-    motion.by = 'program';
-    motion.plane = 'xy';
-    motion.radius = radius;
-    motion.turn = turn;
-    motion.moves = true;
-    setExtremes(motion, 0, quartersPassed(turn, startU, startV, endU, endV));
-    if (!(minX <= motion.minX && motion.maxX <= maxX)) return false;
-    if (!(minY <= motion.minY && motion.maxY <= maxY)) return false;
-    if (!(minZ <= motion.minZ && motion.maxZ <= maxZ)) return false;
-    const along = radius * turn;
-    const rise = motion.toZ - motion.fromZ;
-    motion.length = Math.sqrt(along * along + rise * rise);
     return true;
   }
 
