@@ -7,8 +7,11 @@
 export const LARGEST_KEPT = 64 * 1024 * 1024;
 /** Blocks that are carried out beyond one for every line, in one walk. */
 export const MOST_REPEATED = 2_000_000;
-/** Turns of one loop, or jumps back by one line, before it is taken for one that never ends. */
-export const MOST_TURNS = 100_000;
+/**
+ * Turns of one loop, or jumps back by one line, before it is taken for one that never ends. A curve cut by steps
+ * of a hundredth of a degree takes 36,000 a turn.
+ */
+export const MOST_TURNS = 300_000;
 /** Turns that all begin with the same parameters: where so many pass, all others will. */
 export const MOST_IDLE_TURNS = 1_000;
 /**

@@ -276,6 +276,11 @@ describe('o-words (facts sheet 12.2)', () => {
       'o1 sub\no2 repeat [9]\nG91 G0 X1\no1 return\no2 endrepeat\no1 endsub\no1 call\no1 call\nM2',
       [at(3, 1), at(3, 2)],
     ],
+    [
+      'a sub before a program of the same number',
+      'O7\no7 sub\nG0 X1\no7 endsub\no7 call\nM2',
+      [at(3, 1)],
+    ],
     ['a label that is worked out', '#1=7\no7 sub\nG0 X1\no7 endsub\no#1 call\nM2', [at(3, 1)]],
     // Errors of 12.2.5.
     ['endif without its if', 'o1 endif\nM2', ['1 1-9 unreadable-block flow-unpaired']],

@@ -186,13 +186,20 @@ export class Follower {
     this.run.isCalled = frames.length > 1;
   }
 
-  /** Where a label of a program or a subroutine stands: here, in the program checked, or in the setup. */
-  findCallee(key: string): { readonly program: KeptProgram; readonly start: number } | undefined {
+  /**
+   * Where a label of a program or a subroutine stands: here, in the program checked, or in the setup. An o-word
+   * calls a sub first, M98 and G65 a program.
+   */
+  findCallee(
+    key: string,
+    first: 'program' | 'sub',
+  ): { readonly program: KeptProgram; readonly start: number } | undefined {
     for (const program of new Set([this.frame.program, this.main])) {
       const label = program.findProgram(key);
-      if (label !== undefined) return { program, start: label };
       const sub = program.findSub(key);
-      if (sub !== undefined) return { program, start: sub + 1 };
+      if (sub !== undefined && (first === 'sub' || label === undefined))
+        return { program, start: sub + 1 };
+      if (label !== undefined) return { program, start: label };
     }
     const program = this.library.find(key);
     if (!program) return undefined;
@@ -206,7 +213,9 @@ export class Follower {
    * controller does not know it yet (facts sheet 12.2.1).
    */
   isBehind({ program, start }: Pick<Callee, 'program' | 'start'>): boolean {
-    return program === this.main && this.frame.program === this.main && !this.hasVisited(start - 1);
+    const isHere = program === this.main && this.frame.program === this.main;
+    const isSub = program.shapes.links.get(start - 1)?.kind === 'sub';
+    return isHere && isSub && !this.hasVisited(start - 1);
   }
 
   private hasVisited(line: number): boolean {

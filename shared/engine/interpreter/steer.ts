@@ -174,7 +174,7 @@ export function callKey(
   times: number,
   locals: Locals,
 ): void {
-  const found = follower.findCallee(key);
+  const found = follower.findCallee(key, locals.kind === 'subroutine' ? 'sub' : 'program');
   if (!found) {
     const what = key.startsWith('<') ? `o${key}` : `O${key}`;
     return tellProblem(run, 'subprogram-missing', words, { reason: 'call', what });

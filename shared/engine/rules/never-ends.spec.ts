@@ -80,7 +80,7 @@ test('finds a loop that counts for ever', () => {
     `
 #1=1
 o1 while [#1 GT 0]
-^^^^^^^^^^^^^^^^^^ never-ends: The loop of “o1 while [#1 GT 0]” has not ended after 100,000 turns.
+^^^^^^^^^^^^^^^^^^ never-ends: The loop of “o1 while [#1 GT 0]” has not ended after 300,000 turns.
 #1=[#1+1]
 o1 endwhile
 M2
