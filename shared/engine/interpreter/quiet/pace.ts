@@ -203,7 +203,10 @@ export function handOver(
   return handed * handed <= reached ? handed : Math.sqrt(reached);
 }
 
-/** Seconds of the open motion if it is left at this speed: travelSeconds without its divisions. */
+/**
+ * Seconds of the open motion if it is left at this speed: travelSeconds without its divisions. It is neither
+ * entered nor left faster than it runs.
+ */
 export function openSeconds(state: Float64Array, leave: number): number {
   const length = state[Open.length]!;
   const slowness = state[Open.slowness]!;
@@ -211,10 +214,11 @@ export function openSeconds(state: Float64Array, leave: number): number {
   const most = state[Open.speed]!;
   const squares = 0.5 * (enter * enter + leave * leave);
   const ramps = (most * most - squares) * slowness;
-  if (ramps <= length && leave <= most)
+  if (ramps <= length)
     return (2 * most - enter - leave) * slowness + (length - ramps) * state[Open.perSpeed]!;
   const acceleration = state[Open.acceleration]!;
   const peak = Math.sqrt(acceleration * length + squares);
-  if (enter <= peak && leave <= peak && leave <= most) return (2 * peak - enter - leave) * slowness;
-  return travelSeconds(length, acceleration, most, enter, leave);
+  const faster = enter > leave ? enter : leave;
+  if (peak < faster) return (2 * length) / (enter + leave);
+  return (2 * peak - enter - leave) * slowness;
 }

@@ -41,6 +41,13 @@ const enum Here {
   /** Of the arc at hand, machine mm. */
   centreU,
   centreV,
+  length,
+  /** Its direction where it starts and where it ends, of length 1; its rise is the same all along. */
+  startX,
+  startY,
+  endX,
+  endY,
+  up,
   arcTolerance,
   greatestFeed,
   minutes,
@@ -463,32 +470,44 @@ export class QuietLines {
     if (maxY > here[Here.highY]!) here[Here.highY] = maxY;
     if (toZ < here[Here.lowZ]!) here[Here.lowZ] = toZ;
     if (toZ > here[Here.highZ]!) here[Here.highZ] = toZ;
-    // Pace.followArc for a feed that no axis limits, in place; its tangents are those of arcTangent.
-    const { paceState: state } = this;
-    const speed = here[Here.speed]!;
     const along = turn < 0 ? -around : around;
     const atStart = along / Math.sqrt(startSquare * square);
     const atEnd = along / Math.sqrt(endSquare * square);
-    const up = rise / length;
-    const handed = this.isBlended
-      ? handOver(state, -startV * atStart, startU * atStart, up, speed)
-      : 0;
-    if (state[Open.length] !== 0) state[Open.seconds]! += openSeconds(state, handed);
-    const slowness = here[Here.slowX]! > here[Here.slowY]! ? here[Here.slowX]! : here[Here.slowY]!;
-    state[Open.length] = length;
-    state[Open.enter] = handed < speed ? handed : speed;
-    state[Open.speed] = speed;
-    state[Open.perSpeed] = here[Here.perSpeed]!;
-    state[Open.slowness] = slowness;
-    state[Open.acceleration] = 1 / slowness;
-    state[Open.endX] = -endV * atEnd;
-    state[Open.endY] = endU * atEnd;
-    state[Open.endZ] = up;
+    here[Here.length] = length;
+    here[Here.up] = rise / length;
+    here[Here.startX] = -startV * atStart;
+    here[Here.startY] = startU * atStart;
+    here[Here.endX] = -endV * atEnd;
+    here[Here.endY] = endU * atEnd;
+    this.timeArc();
     here[Here.x] = toX;
     here[Here.y] = toY;
     here[Here.z] = toZ;
     if (this.isFollowed) this.showArc(x, y, z, turn, radius);
     return true;
+  }
+
+  /** Pace.followArc for a feed that no axis limits; its tangents are those of arcTangent. */
+  private timeArc(): void {
+    const { here, paceState: state } = this;
+    const speed = here[Here.speed]!;
+    const up = here[Here.up]!;
+    const handed = this.isBlended
+      ? handOver(state, here[Here.startX]!, here[Here.startY]!, up, speed)
+      : 0;
+    if (state[Open.length] !== 0) state[Open.seconds]! += openSeconds(state, handed);
+    const slowX = here[Here.slowX]!;
+    const slowY = here[Here.slowY]!;
+    const slowness = slowX > slowY ? slowX : slowY;
+    state[Open.length] = here[Here.length]!;
+    state[Open.enter] = handed < speed ? handed : speed;
+    state[Open.speed] = speed;
+    state[Open.perSpeed] = here[Here.perSpeed]!;
+    state[Open.slowness] = slowness;
+    state[Open.acceleration] = 1 / slowness;
+    state[Open.endX] = here[Here.endX]!;
+    state[Open.endY] = here[Here.endY]!;
+    state[Open.endZ] = up;
   }
 
   /** Tells those who follow quiet motion of the arc that led here. */

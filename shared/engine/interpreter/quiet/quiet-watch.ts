@@ -6,7 +6,7 @@ import { Stretch } from './stretch';
 /** Motions told between two questions, at most: what is quiet also depends on where the head is. */
 const MOST_PATIENCE = 64;
 /** Comments remembered as saying nothing; programs repeat themselves. */
-const MOST_COMMENTS = 500;
+const MOST_COMMENTS = 2000;
 /** A message (NISTIR 6556 3.2.4) is handed on without its mark, so that it is never quiet. */
 const MAY_BE_MESSAGE = /^[ \t]*m/i;
 
@@ -47,7 +47,8 @@ export class QuietWatch {
   /** Whether nobody takes anything from a comment, which is plain ASCII. */
   isQuietComment(bytes: Uint8Array, from: number, to: number): boolean {
     if (this.readers.length === 0) return true;
-    const text = String.fromCharCode(...bytes.subarray(from, to));
+    let text = '';
+    for (let at = from; at < to; at++) text += String.fromCharCode(bytes[at]!);
     if (this.quietComments.has(text)) return true;
     if (MAY_BE_MESSAGE.test(text)) return false;
     for (const { saysNothing } of this.readers) if (!saysNothing?.(text)) return false;
