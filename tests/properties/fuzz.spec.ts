@@ -11,7 +11,8 @@ import { mutate, randomNumbers } from './mutate';
  * far above what any takes, so that a slow machine does not fail it and an endless loop does.
  */
 const MILLISECONDS_A_BLOCK = 50;
-const MILLISECONDS_A_PROGRAM = 2_000;
+/** Two million repeated blocks, at most, are some two seconds; a busy machine takes several times that. */
+const MILLISECONDS_A_PROGRAM = 15_000;
 
 const PROGRAMS = [
   CLEAN_PROGRAM,
