@@ -115,8 +115,19 @@ function expand(schedule: Int32Array, bytes: Uint8Array, from: number): void {
   }
 }
 
-/** UTF-8 of a string; a lone surrogate becomes U+FFFD, as encoders do. */
+/** UTF-8 of a string. Nearly always plain ASCII, which needs no more than a copy. */
 function utf8(text: string): Uint8Array {
+  const bytes = new Uint8Array(text.length);
+  for (let at = 0; at < text.length; at++) {
+    const code = text.charCodeAt(at);
+    if (code >= 0x80) return wideUtf8(text);
+    bytes[at] = code;
+  }
+  return bytes;
+}
+
+/** UTF-8 of a string; a lone surrogate becomes U+FFFD, as encoders do. */
+function wideUtf8(text: string): Uint8Array {
   const bytes: number[] = [];
   for (const character of text) {
     const written = character.codePointAt(0)!;
