@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import { LineWords } from '../../shared/engine/lexer/line-words';
+import { PlainLines } from '../../shared/engine/lexer/plain-lines';
 import { readLine } from '../../shared/engine/lexer/read-line';
 import { COUNTS, SEED } from '../counts';
 
@@ -13,6 +14,15 @@ function read(number: string): number {
   readLine(bytes, 0, words);
   expect(words.count).toBe(1);
   return words.values[0]!;
+}
+
+const plain = new PlainLines();
+
+/** As the reader of plain lines has it; undefined where it leaves the line to the one above. */
+function readPlain(number: string): number | undefined {
+  const bytes = new TextEncoder().encode(`X${number}\n`);
+  plain.read(bytes, 0, bytes.length);
+  return plain.count === 1 ? plain.values[0] : undefined;
 }
 
 const digits = (most: number) =>
@@ -33,6 +43,24 @@ test('reads every decimal as parseFloat does, to the last bit', () => {
     { numRuns: COUNTS.numbers, seed: SEED },
   );
   expect(compared).toBeGreaterThanOrEqual(COUNTS.numbers);
+});
+
+test('so does the reader of plain lines, as far as it reads numbers at all', () => {
+  const short = fc
+    .tuple(fc.constantFrom('', '-', '+'), digits(6), fc.constantFrom('', '.'), digits(5))
+    .filter(([, whole, point, part]) => whole !== '' || (point !== '' && part !== ''))
+    .map(([sign, whole, point, part]) => sign + whole + (point === '' ? '' : point + part));
+  let compared = 0;
+  fc.assert(
+    fc.property(short, (number) => {
+      const value = readPlain(number);
+      if (value === undefined) return;
+      compared++;
+      if (!Object.is(value, parseFloat(number))) throw new Error(`${number} is read as ${value}`);
+    }),
+    { numRuns: COUNTS.numbers, seed: SEED },
+  );
+  expect(compared).toBeGreaterThanOrEqual(COUNTS.numbers / 2);
 });
 
 test.each([
