@@ -43,7 +43,7 @@ test('reads every decimal as parseFloat does, to the last bit', () => {
     { numRuns: COUNTS.numbers, seed: SEED },
   );
   expect(compared).toBeGreaterThanOrEqual(COUNTS.numbers);
-});
+}, 120_000);
 
 test('so does the reader of plain lines, as far as it reads numbers at all', () => {
   const short = fc
@@ -61,7 +61,7 @@ test('so does the reader of plain lines, as far as it reads numbers at all', () 
     { numRuns: COUNTS.numbers, seed: SEED },
   );
   expect(compared).toBeGreaterThanOrEqual(COUNTS.numbers / 2);
-});
+}, 120_000);
 
 test.each([
   '0',
