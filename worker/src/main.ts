@@ -39,9 +39,7 @@ async function start(config: Config): Promise<void> {
     now: () => performance.now(),
   };
   const sweeping = sweepNowAndThen(runs, logger, config.sweepSeconds);
-  await queue.work(config.pollSeconds, ({ checkId }) => checkProgram(parts, checkId));
-  logger.info('the worker waits for checks');
-
+  // Before the first check is taken: a signal that came sooner would end the process in the middle of it.
   onStopSignal(logger, async () => {
     const grace = setTimeout(() => stopping.abort(), GRACE_MILLISECONDS);
     await sweeping.stop();
@@ -49,6 +47,8 @@ async function start(config: Config): Promise<void> {
     clearTimeout(grace);
     await database.close();
   });
+  await queue.work(config.pollSeconds, ({ checkId }) => checkProgram(parts, checkId));
+  logger.info('the worker waits for checks');
 }
 
 /** Looks for checks that a dead worker left behind: at the start, and again and again after that. */

@@ -111,7 +111,7 @@ describe('the plan path', () => {
   test('says that it is cut off when even that is not enough', () => {
     let text = HEAD;
     for (let move = 0; move < 2000; move += 1) {
-      text += `G1 X${move % 2 ? 900 : 100} Y${(100 + move * 0.1).toFixed(1)}\n`;
+      text += `G1 X${move % 2 ? 140 : 100} Y${(100 + move * 0.1).toFixed(1)}\n`;
     }
     const { path } = walk(`${text}M30\n`, buildPlanPath({ mostPoints: 500 }));
     expect(path.truncated).toBe(true);
